@@ -1,0 +1,12 @@
+# rainledger_room(NAME SOURCES file... [LINK library...])
+# One room of the house as an object library; the rooms together make the library.
+function(rainledger_room room)
+  cmake_parse_arguments(PARSE_ARGV 1 arg "" "" "SOURCES;LINK")
+  set(target rainledger_${room})
+  set(paths ${arg_SOURCES})
+  list(TRANSFORM paths PREPEND ${PROJECT_SOURCE_DIR}/src/${room}/)
+  add_library(${target} OBJECT ${paths})
+  target_link_libraries(${target} PRIVATE rainledger_options ${arg_LINK})
+  target_include_directories(${target} PRIVATE ${PROJECT_SOURCE_DIR}/src)
+  set_target_properties(${target} PROPERTIES POSITION_INDEPENDENT_CODE ON)
+endfunction()

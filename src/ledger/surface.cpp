@@ -1,0 +1,1 @@
+#include "rainledger/ledger/surface.hpp"

@@ -1,0 +1,1 @@
+#include "rainledger/losses/green_ampt.hpp"

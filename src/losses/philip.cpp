@@ -1,0 +1,1 @@
+#include "rainledger/losses/philip.hpp"

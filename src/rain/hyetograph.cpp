@@ -1,0 +1,1 @@
+#include "rainledger/rain/hyetograph.hpp"

@@ -1,0 +1,1 @@
+#include "rainledger/reference/antecedent.hpp"
