@@ -1,0 +1,209 @@
+#include "rainledger/ledger/ledger.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <cstddef>
+#include <utility>
+#include <variant>
+
+#include "ledger/excess_figures.hpp"
+#include "ledger/march_surface.hpp"
+#include "ledger/places.hpp"
+#include "ledger/recorders.hpp"
+
+namespace rainledger {
+namespace {
+
+// Run-on below a giver whose excess varies within a stretch is handed over in pieces: their number
+// per step is doubled until no account moves by more than this, from the first number to the last.
+constexpr double kRunOnTolerance = 1.0e-6;  // mm
+constexpr double kFirstCuts = 4.0;
+constexpr double kMostCuts = 4096.0;
+
+/// True if the surface's excess can vary while its supply does not.
+bool excess_varies(const Surface& surface) {
+    return !std::holds_alternative<Impervious>(surface.losses) &&
+           !std::holds_alternative<ConstantRate>(surface.losses) &&
+           !std::holds_alternative<PhiIndex>(surface.losses);
+}
+
+/// Surfaces in an order in which every giver comes before its receivers.
+std::vector<std::size_t> givers_first(const Site& site) {
+    std::vector<std::size_t> waiting(site.surfaces.size(), 0);
+    for (const Surface& giver : site.surfaces)
+        for (const RunsOnto& onto : giver.runs_onto)
+            ++waiting[onto.surface];
+    std::vector<std::size_t> order;
+    for (std::size_t i = 0; i < waiting.size(); ++i)
+        if (waiting[i] == 0) order.push_back(i);
+    for (std::size_t done = 0; done < order.size(); ++done)
+        for (const RunsOnto& onto : site.surfaces[order[done]].runs_onto)
+            if (--waiting[onto.surface] == 0) order.push_back(onto.surface);
+    return order;
+}
+
+/// Every surface marched once, run-on handed over in `cuts` parts of a step where it varies.
+class SiteMarch {
+public:
+    SiteMarch(const Site& site, const Hyetograph& rain, double cuts)
+        : site_(site), rain_(rain), cuts_(cuts), run_on_(site.surfaces.size()) {
+        out_.surfaces.resize(site.surfaces.size());
+    }
+
+    SiteLedger run(const std::vector<std::size_t>& order) {
+        for (const std::size_t index : order)
+            march(index);
+        return std::move(out_);
+    }
+
+private:
+    void march(std::size_t index) {
+        const Surface& surface = site_.surfaces[index];
+        const RateSeries arriving = std::move(run_on_[index]);
+        const bool gives = !surface.runs_onto.empty();
+        const MarchInput input{arriving.empty() ? nullptr : &arriving,
+                               gives && excess_varies(surface) ? cuts_ : 1.0};
+        const ConstantRate matched = matched_phi(index, input);
+        RateSeries outflow;
+        LedgerRecorder recorder(rain_, gives ? &outflow : nullptr);
+        march_surface(surface, matched, rain_, input, recorder);
+        SurfaceLedger& ledger = out_.surfaces[index] = recorder.finish();
+        if (std::holds_alternative<PhiIndex>(surface.losses))
+            ledger.phi_index_mm_per_h = matched.rate_mm_per_h;
+        for (const RunsOnto& onto : surface.runs_onto)
+            add_scaled(run_on_[onto.surface], outflow,
+                       onto.share * surface.area_m2 / site_.surfaces[onto.surface].area_m2);
+    }
+
+    ConstantRate matched_phi(std::size_t index, const MarchInput& input) {
+        const Surface& surface = site_.surfaces[index];
+        const auto* phi = std::get_if<PhiIndex>(&surface.losses);
+        if (phi == nullptr) return {};
+        const PhiMatch match = match_phi_index(*phi, surface, rain_, input);
+        if (const auto* rate = std::get_if<ConstantRate>(&match)) return *rate;
+        out_.unmatched.push_back(std::get<UnmatchedPhi>(match));
+        out_.unmatched.back().surface = index;
+        return {};
+    }
+
+    const Site& site_;
+    const Hyetograph& rain_;
+    double cuts_;
+    std::vector<RateSeries> run_on_;
+    SiteLedger out_;
+};
+
+double moved_mm(const Accounts& one, const Accounts& other) {
+    return std::max({std::abs(one.run_on_mm - other.run_on_mm),
+                     std::abs(one.initial_loss_mm - other.initial_loss_mm),
+                     std::abs(one.infiltrated_mm - other.infiltrated_mm),
+                     std::abs(one.ponded_mm - other.ponded_mm),
+                     std::abs(one.excess_mm - other.excess_mm)});
+}
+
+/// The largest move of any account of any surface, step or total, between two marches.
+double moved_mm(const SiteLedger& one, const SiteLedger& other) {
+    double moved = 0.0;
+    for (std::size_t i = 0; i < one.surfaces.size(); ++i) {
+        const SurfaceLedger& a = one.surfaces[i];
+        const SurfaceLedger& b = other.surfaces[i];
+        moved = std::max(moved, moved_mm(a.total, b.total));
+        for (std::size_t step = 0; step < a.rows.size(); ++step)
+            moved = std::max(moved, moved_mm(a.rows[step].accounts, b.rows[step].accounts));
+    }
+    return moved;
+}
+
+SiteLedger march_site(const Site& site, const Hyetograph& rain) {
+    const std::vector<std::size_t> order = givers_first(site);
+    const bool hands_varying = std::ranges::any_of(site.surfaces, [](const Surface& surface) {
+        return !surface.runs_onto.empty() && excess_varies(surface);
+    });
+    SiteLedger ledger = SiteMarch(site, rain, kFirstCuts).run(order);
+    if (!hands_varying) return ledger;
+    double moved = 0.0;
+    for (double cuts = 2.0 * kFirstCuts; cuts <= kMostCuts; cuts *= 2.0) {
+        SiteLedger finer = SiteMarch(site, rain, cuts).run(order);
+        moved = moved_mm(ledger, finer);
+        ledger = std::move(finer);
+        if (moved <= kRunOnTolerance) return ledger;
+    }
+    ledger.coarse_run_on = CoarseRunOn{moved};
+    return ledger;
+}
+
+void add_row(LedgerRow& sum, const LedgerRow& part) {
+    sum.accounts.rain_mm += part.accounts.rain_mm;
+    sum.accounts.run_on_mm += part.accounts.run_on_mm;
+    sum.accounts.initial_loss_mm += part.accounts.initial_loss_mm;
+    sum.accounts.infiltrated_mm += part.accounts.infiltrated_mm;
+    sum.accounts.ponded_mm = part.accounts.ponded_mm;
+    sum.accounts.excess_mm += part.accounts.excess_mm;
+    sum.capacity_mm_per_h = part.capacity_mm_per_h;
+}
+
+/// Rows of the finer steps added up to reporting steps.
+std::vector<LedgerRow> reported_rows(const std::vector<LedgerRow>& fine,
+                                     const std::vector<double>& fine_edges_h,
+                                     const std::vector<double>& edges_h) {
+    std::vector<LedgerRow> out(edges_h.size() - 1);
+    std::size_t row = 0;
+    for (std::size_t step = 0; step < fine.size(); ++step) {
+        const double middle = 0.5 * (fine_edges_h[step] + fine_edges_h[step + 1]);
+        while (row + 1 < out.size() && middle > edges_h[row + 1])
+            ++row;
+        add_row(out[row], fine[step]);
+    }
+    return out;
+}
+
+}  // namespace
+
+SiteLedger keep_ledger(const Site& site, const Hyetograph& rain) {
+    SiteLedger ledger = march_site(site, rain);
+    for (std::size_t i = 0; i < site.surfaces.size(); ++i) {
+        SurfaceLedger& surface = ledger.surfaces[i];
+        surface.figures =
+            excess_figures(surface.rows, surface.total, site.surfaces[i].area_m2, rain);
+    }
+    ledger.places = place_ledgers(site, ledger.surfaces, rain);
+    ledger.site = site_ledger(site, ledger.surfaces, rain);
+    return ledger;
+}
+
+ReportedLedger keep_ledger_every(const Site& site, const Hyetograph& rain, double every_h) {
+    ReportedLedger out;
+    const double start = rain.edges_h.front();
+    const double end = rain.edges_h.back();
+    // A report edge within a rounding of the end is the end.
+    constexpr double kEdgeTolerance = 1.0e-9;
+    for (double k = 0.0; start + k * every_h < end - kEdgeTolerance; ++k)
+        out.edges_h.push_back(start + k * every_h);
+    out.edges_h.push_back(end);
+
+    const CutHyetograph cut = cut_hyetograph(rain, out.edges_h);
+    const SiteLedger fine = keep_ledger(site, cut.rain);
+    out.ledger = keep_ledger(site, rain);
+    const auto report = [&](std::vector<LedgerRow>& rows, const std::vector<LedgerRow>& finer) {
+        rows = reported_rows(finer, cut.rain.edges_h, out.edges_h);
+    };
+    for (std::size_t i = 0; i < fine.surfaces.size(); ++i)
+        report(out.ledger.surfaces[i].rows, fine.surfaces[i].rows);
+    for (std::size_t i = 0; i < fine.places.size(); ++i)
+        report(out.ledger.places[i].rows, fine.places[i].rows);
+    report(out.ledger.site.rows, fine.site.rows);
+    return out;
+}
+
+Accounts march_totals(const Surface& surface, const Hyetograph& rain) {
+    ConstantRate matched;
+    if (const auto* phi = std::get_if<PhiIndex>(&surface.losses)) {
+        const PhiMatch match = match_phi_index(*phi, surface, rain, {});
+        if (const auto* rate = std::get_if<ConstantRate>(&match)) matched = *rate;
+    }
+    TotalsRecorder recorder;
+    march_surface(surface, matched, rain, {}, recorder);
+    return recorder.total();
+}
+
+}  // namespace rainledger
