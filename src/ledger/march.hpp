@@ -216,7 +216,7 @@ private:
             from += dry / w;
             h -= dry / w;
         }
-        const double parts = std::max(1.0, std::ceil(h / longest_));
+        const double parts = h <= longest_ ? 1.0 : std::ceil(h / longest_);
         for (double i = 0.0; i < parts; ++i)
             run_off(from + h * i / parts, h / parts, w);
     }

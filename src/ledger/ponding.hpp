@@ -121,7 +121,11 @@ private:
     }
 
     void run_off(double w) {
-        const double parts = std::max(1.0, std::ceil(left_ / longest_excess_));
+        if (left_ <= longest_excess_) {
+            run_off_for(w, left_);
+            return;
+        }
+        const double parts = std::ceil(left_ / longest_excess_);
         const double h = left_ / parts;
         for (double part = 1.0; part < parts; ++part)
             run_off_for(w, h);

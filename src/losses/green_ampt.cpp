@@ -58,7 +58,8 @@ double green_ampt_growth(double K, double S, double F0, double dt) {
     if (S == 0.0) return K * dt;
     const double z = F0 / S;
     const double h = K * dt / S;
-    if (!std::isfinite(z) || !std::isfinite(h)) return K * dt;  // S is negligible beside F0 or K dt
+    // S is negligible beside F0 or K dt, and the squares below would overflow.
+    if (!(z < 1.0e100 && h < 1.0e100)) return K * dt;
     return growth_increment(z, h) * (S + F0);
 }
 

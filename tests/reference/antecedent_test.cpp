@@ -1,0 +1,34 @@
+#include "rainledger/reference/antecedent.hpp"
+
+#include <cstddef>
+
+#include "test.hpp"
+
+namespace rainledger {
+
+TEST_CASE("the antecedent table falls from row to row and holds I <= II <= III") {
+    const auto table = antecedent_table();
+    REQUIRE(table.size() == 77);
+    CHECK(table.front().condition_2 == 100);
+    CHECK(table.back().condition_2 == 0);
+    for (std::size_t i = 0; i < table.size(); ++i) {
+        CHECK(table[i].condition_1 <= table[i].condition_2);
+        CHECK(table[i].condition_3 >= table[i].condition_2);
+        if (i == 0) continue;
+        CHECK(table[i].condition_2 < table[i - 1].condition_2);
+        CHECK(table[i].condition_1 <= table[i - 1].condition_1);
+        CHECK(table[i].condition_3 <= table[i - 1].condition_3);
+    }
+}
+
+TEST_CASE("numbers between rows are interpolated") {
+    CHECK(antecedent_dry(80.0) == 63.0);
+    CHECK(antecedent_wet(80.0) == 91.0);
+    CHECK_THAT(antecedent_dry(80.5), WithinAbs(63.5, 1e-12));
+    CHECK_THAT(antecedent_wet(28.0), WithinAbs(43.0 + 0.6 * 7.0, 1e-12));
+    CHECK(antecedent_dry(100.0) == 100.0);
+    CHECK(antecedent_wet(100.0) == 100.0);
+    CHECK_THAT(antecedent_wet(2.5), WithinAbs(6.5, 1e-12));
+}
+
+}  // namespace rainledger
