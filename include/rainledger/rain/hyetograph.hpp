@@ -61,8 +61,9 @@ struct Hyetograph {
 /// Scales every depth: an allowance on rain. `factor` >= 0.
 void multiply_depths(Hyetograph& rain, double factor);
 
-/// Appends `hours` > 0 of dry time in steps as long as the last one, the very last shorter where
-/// needed. own_steps stays.
+/// Appends `hours` > 0 of dry time in steps as long as the storm's last one, the very last shorter
+/// where needed; a remainder below 1e-9 h is dropped. own_steps stays. Stamped edges go on in whole
+/// milliseconds and keep the last edge's UTC offset. The caller bounds the number of steps.
 void append_dry_time(Hyetograph& rain, double hours);
 
 /// Depth in mm and duration in h of the storm's own steps, and its largest step intensity in mm/h.
@@ -71,11 +72,14 @@ void append_dry_time(Hyetograph& rain, double hours);
 [[nodiscard]] double peak_intensity_mm_per_h(const Hyetograph& rain);
 
 /// ISO 8601 text of edge `edge` of a stamped hyetograph, with its UTC offset where known:
-/// "2026-03-04T10:05:00+01:00". Fractions of a second are written only where there are any.
+/// "2026-03-04T10:05:00+01:00", "2026-03-04T09:05:00Z". Fractions of a second (three digits) are
+/// written only where there are any.
 [[nodiscard]] std::string iso_stamp(const StampedEdges& stamps, std::size_t edge);
 
 /// The same rain cut at further edges (elapsed h, rising). A cut within 1e-9 h of an existing edge
-/// is that edge. `step_of[i]` of the result is the original step that new step i lies in.
+/// is that edge; a cut outside the rain is none. Uncut steps stay as they are to the last bit, and
+/// the parts of a step add up to it. `step_of[i]` of the result is the original step that new step
+/// i lies in.
 struct CutHyetograph {
     Hyetograph rain;  ///< edges, durations, depths and own_steps only
     std::vector<std::size_t> step_of;

@@ -32,12 +32,34 @@ struct CsvLayout {
 
 /// Reads a hyetograph. Every problem is added to `diagnostics` with its line and column; after
 /// twenty errors the rest are counted, not listed. Nothing is returned if any was an error.
+///
+/// Text: UTF-8 with or without a byte-order mark; lines end in LF or CRLF; blank lines and lines
+/// that begin with `#` say nothing. The header row decides the separator: tab, else semicolon, else
+/// comma. Cells may be padded with blanks and may stand in quotes, within their line. Decimal
+/// commas are read where the separator is none, but not mixed with decimal points.
+///
+/// Columns are found by name, whatever the case: `start`, `end`, both, or `time`; and `depth`,
+/// `intensity` or `cumulative`, each with its unit in square brackets; timestamps have none. A name
+/// in the layout matches a whole header cell, or what stands before its bracket. Others are
+/// ignored.
+///
+/// With one time column and no `every_h` the steps are contiguous. `end` begins at 0, with
+/// timestamps as long before the first as the second is after it; `start` repeats its last
+/// interval. A step over three times the median length is a warning. Otherwise each row covers its
+/// own time, and holes may lie between; times within 1e-9 h are the same.
+///
+/// A cumulative reading stands at the end of its row's step and counts from 0; a first row at
+/// elapsed time 0 of `end` times is a baseline instead. Where readings are missing or holes lie
+/// between, those steps are dry and what fell meanwhile falls in the step of the next reading, so
+/// that nothing is lost. With timestamps a first reading larger than every later rise is a warning.
+///
+/// An empty cell, NA, NaN and the stated mark are missing values. Zones: see Zone::instant.
 [[nodiscard]] std::optional<Hyetograph> read_hyetograph_csv(const std::string& name,
                                                             std::string text,
                                                             const CsvLayout& layout,
                                                             Diagnostics& diagnostics);
 
-/// True if `zone` is in the machine's time zone database.
+/// True if `zone` is in the machine's time zone database. Never throws.
 [[nodiscard]] bool is_known_zone(const std::string& zone);
 
 }  // namespace rainledger

@@ -1,0 +1,362 @@
+#include "rain/csv_header.hpp"
+
+#include <algorithm>
+#include <array>
+#include <string_view>
+#include <utility>
+#include <vector>
+
+#include "rainledger/base/suggest.hpp"
+
+namespace rainledger {
+namespace {
+
+constexpr std::array<std::string_view, 3> kTimeNames{"start", "end", "time"};
+constexpr std::array<std::string_view, 3> kRainNames{"depth", "intensity", "cumulative"};
+constexpr std::array kKinds{RainKind::depth, RainKind::intensity, RainKind::cumulative};
+
+std::string_view kind_name(RainKind kind) {
+    return kRainNames[static_cast<std::size_t>(kind)];
+}
+
+std::optional<RainKind> kind_called(std::string_view name) {
+    for (const RainKind kind : kKinds)
+        if (kind_name(kind) == name) return kind;
+    return std::nullopt;
+}
+
+/// A header cell taken apart: "End [min]" is called "end" and has the unit "min".
+struct HeaderCell {
+    CsvColumn column;
+    std::string name;  ///< before the bracket, in lower case
+    std::optional<std::string> unit;
+};
+
+std::string lower(std::string_view text) {
+    std::string out(text);
+    for (char& c : out)
+        if (c >= 'A' && c <= 'Z') c = static_cast<char>(c - 'A' + 'a');
+    return out;
+}
+
+HeaderCell take_apart(CsvColumn column) {
+    HeaderCell cell;
+    const std::string_view title = column.title;
+    const std::size_t bracket = title.rfind('[');
+    if (bracket != std::string_view::npos && title.ends_with(']')) {
+        cell.name = lower(trimmed(title.substr(0, bracket)));
+        cell.unit = trimmed(title.substr(bracket + 1, title.size() - bracket - 2));
+    } else {
+        cell.name = lower(title);
+    }
+    cell.column = std::move(column);
+    return cell;
+}
+
+/// The separator of a header row: a tab or a semicolon outside quotes is never part of a name.
+char find_separator(std::string_view line) {
+    bool quoted = false;
+    char separator = ',';
+    for (const char c : line) {
+        if (c == '"') quoted = !quoted;
+        if (quoted) continue;
+        if (c == '\t') return c;
+        if (c == ';') separator = c;
+    }
+    return separator;
+}
+
+class HeaderReader {
+public:
+    HeaderReader(const CsvLine& line, const CsvLayout& layout, CsvProblems& problems)
+        : line_(line), layout_(layout), problems_(problems) {}
+
+    std::optional<CsvColumns> read() {
+        split();
+        if (!sound_) return std::nullopt;
+        find_time();
+        find_rain();
+        if (!sound_) return std::nullopt;
+        return columns_;
+    }
+
+private:
+    using Found = std::vector<const HeaderCell*>;
+
+    void split();
+    void find_time();
+    void take_named_time();
+    void take_known_times();
+    void take_time(const HeaderCell& cell, StampMeaning meaning);
+    void check_stated_meaning();
+    void find_time_unit(const HeaderCell& cell);
+    void find_rain();
+    void take_named_rain();
+    void take_known_rain();
+    void take_rain(const HeaderCell& cell, RainKind kind);
+
+    [[nodiscard]] Found called(std::string_view name) const;
+    [[nodiscard]] const HeaderCell* titled(const std::string& title);
+    [[nodiscard]] const HeaderCell* only(const Found& found);
+    [[nodiscard]] std::string titles() const;
+    [[nodiscard]] std::string way_out(std::span<const std::string_view> known,
+                                      std::string_view example) const;
+
+    void error(std::size_t place, std::string message, std::string hint) {
+        sound_ = false;
+        problems_.error(line_.number, place, std::move(message), std::move(hint));
+    }
+
+    const CsvLine& line_;
+    const CsvLayout& layout_;
+    CsvProblems& problems_;
+    bool sound_ = true;
+    std::vector<HeaderCell> cells_;
+    const HeaderCell* time_cell_ = nullptr;
+    CsvColumns columns_;
+};
+
+void HeaderReader::split() {
+    columns_.line = line_.number;
+    columns_.separator = find_separator(line_.text);
+    const char* at = line_.text.data();
+    const char* const end = at + line_.text.size();
+    std::string buffer;
+    for (bool more = true; more; ++columns_.count) {
+        const CsvCell cell = cut_cell(at, end, columns_.separator, buffer);
+        if (cell.form != CellForm::sound) {
+            sound_ = false;
+            report_form(problems_, line_, cell);
+        }
+        cells_.push_back(
+            take_apart({columns_.count, line_.column_of(cell.begin), std::string(cell.text)}));
+        more = at != end;
+        if (more) ++at;
+    }
+}
+
+HeaderReader::Found HeaderReader::called(std::string_view name) const {
+    Found found;
+    for (const HeaderCell& cell : cells_)
+        if (cell.name == name) found.push_back(&cell);
+    return found;
+}
+
+std::string HeaderReader::titles() const {
+    std::string out = "columns here: ";
+    for (const HeaderCell& cell : cells_)
+        out += (cell.column.index > 0 ? ", " : "") + shown(cell.column.title);
+    return out;
+}
+
+const HeaderCell* HeaderReader::only(const Found& found) {
+    if (found.empty()) return nullptr;
+    if (found.size() > 1)
+        error(found[1]->column.place, "a second column is called " + shown(found[1]->column.title),
+              "rename one of the two");
+    return found.front();
+}
+
+/// The column with this whole title, else the one with this title before its bracket.
+const HeaderCell* HeaderReader::titled(const std::string& title) {
+    Found found;
+    for (const HeaderCell& cell : cells_)
+        if (cell.column.title == title) found.push_back(&cell);
+    if (found.empty()) found = called(lower(title));
+    if (found.empty()) {
+        std::vector<std::string_view> known;
+        for (const HeaderCell& cell : cells_)
+            known.push_back(cell.column.title);
+        const auto near = nearest(title, known);
+        const std::string guess = near ? "did you mean " + shown(*near) + "? " : "";
+        error(1, "there is no column " + shown(title), guess + titles());
+    }
+    return only(found);
+}
+
+/// What to do when no column has one of the known names: the likely slip, the columns there are,
+/// and an example.
+std::string HeaderReader::way_out(std::span<const std::string_view> known,
+                                  std::string_view example) const {
+    std::string out;
+    for (const HeaderCell& cell : cells_) {
+        const std::string_view word = trimmed(
+            std::string_view(cell.name).substr(0, std::min(cell.name.find('('), cell.name.size())));
+        const auto near = nearest(word, known);
+        if (near && out.empty())
+            out = "is " + shown(cell.column.title) + " meant to be " + shown(*near) + "? ";
+    }
+    return out + titles() + "; " + std::string(example);
+}
+
+void HeaderReader::find_time() {
+    if (layout_.time_column)
+        take_named_time();
+    else
+        take_known_times();
+    if (time_cell_ != nullptr) check_stated_meaning();
+}
+
+void HeaderReader::take_named_time() {
+    const HeaderCell* const cell = titled(*layout_.time_column);
+    if (cell == nullptr) return;
+    if (cell->name == "start" || cell->name == "end")
+        take_time(*cell, cell->name == "start" ? StampMeaning::start : StampMeaning::end);
+    else if (layout_.stamp)
+        take_time(*cell, *layout_.stamp);
+    else
+        error(cell->column.place,
+              "it is not stated whether " + shown(cell->column.title) +
+                  " is the start or the end of a step",
+              "state it in the scenario with stamp: start or stamp: end");
+}
+
+void HeaderReader::take_known_times() {
+    const HeaderCell* const start = only(called("start"));
+    const HeaderCell* const end = only(called("end"));
+    const HeaderCell* const time = only(called("time"));
+    if (time != nullptr && (start != nullptr || end != nullptr)) {
+        error(time->column.place, "there are two columns for one time",
+              "state which to read in the scenario with time:");
+    } else if (time != nullptr && !layout_.stamp) {
+        error(time->column.place,
+              "it is not stated whether 'time' is the start or the end of a step",
+              "state it in the scenario with stamp: start or stamp: end, or call the column "
+              "start or end");
+    } else if (time != nullptr) {
+        take_time(*time, *layout_.stamp);
+    } else {
+        if (start != nullptr) take_time(*start, StampMeaning::start);
+        if (end != nullptr) take_time(*end, StampMeaning::end);
+        if (start == nullptr && end == nullptr)
+            error(1, "there is no time column",
+                  way_out(kTimeNames, "call it 'end [min]', or 'end' for timestamps"));
+    }
+}
+
+void HeaderReader::take_time(const HeaderCell& cell, StampMeaning meaning) {
+    find_time_unit(cell);
+    time_cell_ = &cell;
+    (meaning == StampMeaning::start ? columns_.start : columns_.end) = cell.column;
+}
+
+void HeaderReader::find_time_unit(const HeaderCell& cell) {
+    const auto& unit = layout_.time_unit ? layout_.time_unit : cell.unit;
+    const std::string name = unit.value_or("");
+    if (time_cell_ != nullptr && name != columns_.time_unit) {
+        error(cell.column.place, "start and end are not in the same unit",
+              "give both in the same unit, or state which to read in the scenario with time:");
+        return;
+    }
+    columns_.stamped = !unit;
+    columns_.time_unit = name;
+    if (!unit) return;
+    if (const auto known = find_unit(name, Dimension::time))
+        columns_.to_h = *known;
+    else
+        error(cell.column.place, shown(name) + " is not a unit of time",
+              "known here: " + std::string(accepted_units(Dimension::time)) +
+                  "; timestamps take no unit");
+}
+
+/// Refuses what the scenario states about times when the columns already say it themselves.
+void HeaderReader::check_stated_meaning() {
+    const std::size_t place = time_cell_->column.place;
+    const bool both = columns_.start && columns_.end;
+    const bool is_start = time_cell_->name == "start";
+    if (both && layout_.every_h)
+        error(place, "the rows give their own start and end, and the scenario gives every: too",
+              "leave out every:");
+    if (both && layout_.stamp)
+        error(place, "the rows give their own start and end, and the scenario gives stamp: too",
+              "leave out stamp:");
+    if (both || !layout_.stamp || (!is_start && time_cell_->name != "end")) return;
+    if (is_start != (*layout_.stamp == StampMeaning::start))
+        error(place,
+              "column " + shown(time_cell_->column.title) +
+                  " contradicts the scenario's stamp: " + (is_start ? "end" : "start"),
+              "leave out stamp:, or rename the column");
+}
+
+void HeaderReader::find_rain() {
+    if (layout_.rain_column)
+        take_named_rain();
+    else
+        take_known_rain();
+}
+
+void HeaderReader::take_named_rain() {
+    const HeaderCell* const cell = titled(*layout_.rain_column);
+    if (cell == nullptr) return;
+    const auto kind = layout_.kind ? layout_.kind : kind_called(cell->name);
+    if (cell == time_cell_)
+        error(cell->column.place, "this column is named for both time and rain",
+              "name two different columns under time: and rain:");
+    else if (kind)
+        take_rain(*cell, *kind);
+    else
+        error(cell->column.place,
+              "it is not stated what kind of rain " + shown(cell->column.title) + " holds",
+              "state it in the scenario with kind: depth, kind: intensity or kind: cumulative");
+}
+
+void HeaderReader::take_known_rain() {
+    Found found;
+    for (const std::string_view name : kRainNames)
+        if (const HeaderCell* const cell = only(called(name))) found.push_back(cell);
+    const auto wanted = [&](const HeaderCell* cell) {
+        return layout_.kind && cell->name == kind_name(*layout_.kind);
+    };
+    const auto chosen = std::find_if(found.begin(), found.end(), wanted);
+    if (found.empty()) {
+        error(1, "there is no rain column",
+              way_out(kRainNames, "call it 'depth [mm]', 'intensity [mm/h]' or 'cumulative [mm]'"));
+    } else if (chosen != found.end()) {
+        take_rain(**chosen, *layout_.kind);
+    } else if (layout_.kind) {
+        error(found.front()->column.place,
+              "column " + shown(found.front()->column.title) +
+                  " contradicts the scenario's kind: " + std::string(kind_name(*layout_.kind)),
+              "leave out kind:, or rename the column");
+    } else if (found.size() > 1) {
+        error(std::max(found[0]->column.place, found[1]->column.place),
+              "there are two rain columns, " + shown(found[0]->column.title) + " and " +
+                  shown(found[1]->column.title),
+              "state which to read in the scenario with rain:");
+    } else {
+        take_rain(*found.front(), *kind_called(found.front()->name));
+    }
+}
+
+void HeaderReader::take_rain(const HeaderCell& cell, RainKind kind) {
+    columns_.rain = cell.column;
+    columns_.kind = kind;
+    const auto& unit = layout_.rain_unit ? layout_.rain_unit : cell.unit;
+    const bool is_rate = kind == RainKind::intensity;
+    const Dimension dimension = is_rate ? Dimension::rate : Dimension::depth;
+    if (!unit) {
+        error(cell.column.place, "column " + shown(cell.column.title) + " has no unit",
+              is_rate ? "write it in brackets, 'intensity [mm/h]' or 'intensity [in/h]'"
+                      : "write it in brackets, '" + std::string(kind_name(kind)) + " [mm]' or '" +
+                            std::string(kind_name(kind)) + " [in]'");
+    } else if (const auto known = find_unit(*unit, dimension)) {
+        columns_.to_mm = *known;
+    } else {
+        const bool swapped =
+            find_unit(*unit, is_rate ? Dimension::depth : Dimension::rate).has_value();
+        const std::string_view other = is_rate ? "depth or cumulative" : "intensity";
+        error(cell.column.place,
+              shown(*unit) + " is not a unit of " + (is_rate ? "intensity" : "depth"),
+              swapped ? "rain in " + *unit + " is called " + std::string(other)
+                      : "known here: " + std::string(accepted_units(dimension)));
+    }
+}
+
+}  // namespace
+
+std::optional<CsvColumns> read_csv_header(const CsvLine& line, const CsvLayout& layout,
+                                          CsvProblems& problems) {
+    return HeaderReader(line, layout, problems).read();
+}
+
+}  // namespace rainledger

@@ -1,0 +1,44 @@
+#pragma once
+
+#include <cstddef>
+#include <optional>
+#include <string>
+
+#include "rain/csv_text.hpp"
+#include "rainledger/base/quantity.hpp"
+#include "rainledger/rain/hyetograph_csv.hpp"
+
+// The header row of a hyetograph CSV: which columns hold what, in which units.
+namespace rainledger {
+
+/// Where a column stands: its index among the cells, and its byte column for messages.
+struct CsvColumn {
+    std::size_t index = 0;
+    std::size_t place = 1;
+    std::string title;  ///< the whole header cell
+};
+
+struct CsvColumns {
+    std::size_t line = 1;
+    std::size_t count = 0;
+    char separator = ',';
+
+    std::optional<CsvColumn> start;
+    std::optional<CsvColumn> end;
+    bool stamped = false;   ///< timestamps instead of elapsed times
+    std::string time_unit;  ///< of elapsed times
+    Unit to_h;
+
+    CsvColumn rain;
+    RainKind kind = RainKind::depth;
+    Unit to_mm;  ///< to mm, or to mm/h for intensities
+
+    [[nodiscard]] const CsvColumn& first_time() const { return start ? *start : *end; }
+};
+
+/// Understands the header row; nothing after an error.
+[[nodiscard]] std::optional<CsvColumns> read_csv_header(const CsvLine& line,
+                                                        const CsvLayout& layout,
+                                                        CsvProblems& problems);
+
+}  // namespace rainledger
