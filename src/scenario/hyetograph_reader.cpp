@@ -1,0 +1,107 @@
+#include <filesystem>
+#include <string>
+
+#include "rainledger/base/whole_file.hpp"
+#include "rainledger/rain/hyetograph_csv.hpp"
+#include "scenario/storm_reader.hpp"
+
+// Rain from a CSV file that the scenario names.
+namespace rainledger {
+namespace {
+
+constexpr const char* kFileExample = "write a file name, such as 'hyetograph: rain.csv'";
+
+/// A file name relative to the scenario's folder, as messages show it.
+std::string path_beside(const std::string& scenario, const std::string& file) {
+    return (std::filesystem::path(scenario).parent_path() / file).string();
+}
+
+/// A unit of one of the dimensions, kept as text for the CSV reader.
+std::optional<std::string> read_unit(const ClosedMap& map, std::string_view key,
+                                     std::initializer_list<Dimension> dimensions,
+                                     const std::string& hint) {
+    const auto name = map.text(key, hint);
+    if (!name) return std::nullopt;
+    for (const Dimension dimension : dimensions)
+        if (find_unit(*name, dimension)) return name;
+    map.reading().error(map.mark_of(key), std::string(key) + ": '" + *name + "' is not a unit here",
+                        hint);
+    return std::nullopt;
+}
+
+/// Whether the unit and the kind of the rain column speak of the same thing.
+void check_unit_and_kind(const ClosedMap& map, const CsvLayout& layout) {
+    if (!layout.rain_unit || !layout.kind) return;
+    const bool rate = find_unit(*layout.rain_unit, Dimension::rate).has_value();
+    const bool intensity = *layout.kind == RainKind::intensity;
+    if (rate == intensity) return;
+    map.reading().error(
+        map.mark_of("unit"),
+        "unit: '" + *layout.rain_unit + "' does not go with 'kind: " + map.shown("kind") + "'",
+        intensity ? "an intensity takes a unit such as 'mm/h'"
+                  : "a depth takes a unit such as 'mm'");
+}
+
+void read_zone(const ClosedMap& map, CsvLayout& layout) {
+    const std::string hint = "write a zone by its place, such as 'Europe/Madrid'";
+    const auto zone = map.text("zone", hint);
+    if (!zone) return;
+    if (!is_known_zone(*zone))
+        map.reading().error(map.mark_of("zone"),
+                            "zone: '" + *zone + "' is not in the time zone database", hint);
+    layout.zone = zone;
+}
+
+CsvLayout read_layout(const ClosedMap& map) {
+    CsvLayout layout;
+    layout.time_column = map.text("time", "write the header of the time column");
+    layout.rain_column = map.text("rain", "write the header of the rain column");
+    layout.rain_unit = read_unit(map, "unit", {Dimension::depth, Dimension::rate},
+                                 "write a unit such as 'mm', 'in', 'mm/h' or 'in/h'");
+    layout.time_unit =
+        read_unit(map, "time_unit", {Dimension::time}, "write a unit such as 's', 'min' or 'h'");
+    if (const auto kind = map.word("kind", kRainKinds)) layout.kind = static_cast<RainKind>(*kind);
+    if (const auto stamp = map.word("stamp", kStamps))
+        layout.stamp = static_cast<StampMeaning>(*stamp);
+    layout.every_h = map.quantity("every", Dimension::time, Least::above_zero);
+    read_zone(map, layout);
+    layout.gaps_are_dry = map.word("gaps", kGaps).has_value();
+    layout.missing = map.text("missing", "write the text that marks a missing value, such as -999");
+    check_unit_and_kind(map, layout);
+    return layout;
+}
+
+}  // namespace
+
+std::optional<Hyetograph> read_hyetograph(const Reading& reading, const Entry& entry,
+                                          std::string& described_as) {
+    Entry file = entry;
+    CsvLayout layout;
+    if (entry.value.IsMap()) {
+        const auto map =
+            ClosedMap::read(reading, entry, "hyetograph", kHyetographKeys, kFileExample);
+        layout = read_layout(*map);
+        const Entry* named = map->require("file", "rain.csv");
+        if (named == nullptr) return std::nullopt;
+        file = *named;
+    }
+    const auto name = read_text(reading, file, kFileExample);
+    if (!name) return std::nullopt;
+    if (name->empty()) {
+        reading.error(file.mark(), "the file name is empty", kFileExample);
+        return std::nullopt;
+    }
+    described_as = "file " + *name;
+    const std::string path = path_beside(reading.name(), *name);
+    std::string problem;
+    auto text = read_whole_file(path, problem);
+    if (!text) {
+        reading.diagnostics().unreadable(reading.at(file.mark()),
+                                         "cannot read '" + path + "': " + problem,
+                                         "file names are relative to the scenario's folder");
+        return std::nullopt;
+    }
+    return read_hyetograph_csv(path, std::move(*text), layout, reading.diagnostics());
+}
+
+}  // namespace rainledger

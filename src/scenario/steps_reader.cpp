@@ -1,0 +1,222 @@
+#include <algorithm>
+#include <string>
+#include <utility>
+
+#include "rainledger/base/number.hpp"
+#include "scenario/storm_reader.hpp"
+
+// Rain written out step by step in the scenario.
+namespace rainledger {
+namespace {
+
+constexpr std::size_t kMostListed = 20;         // errors shown of one list; the rest are counted
+constexpr double kShortestStepH = 1.0 / 3.6e6;  // 1 ms; intensities stay finite
+
+constexpr const char* kStepsExample =
+    "write 'steps: {every: 5 min, depths: [0.4, 1.1, 2.6], unit: mm}'";
+
+/// Reads every entry of a list with `read_one`, which returns an optional number; nothing if any is
+/// wrong. A long list of errors is cut short.
+template <class ReadOne>
+std::optional<std::vector<double>> read_numbers(const Reading& reading, const Entry& list,
+                                                ReadOne read_one) {
+    if (!is_list(reading, list, "a list", kStepsExample)) return std::nullopt;
+    std::vector<double> numbers;
+    numbers.reserve(list.value.size());
+    std::size_t wrong = 0;
+    std::size_t position = 0;
+    for (const auto& node : list.value) {
+        ++position;
+        const YAML::Mark mark = node.Mark().is_null() ? list.mark() : node.Mark();
+        const auto number =
+            read_one(Entry{list.key + ", entry " + std::to_string(position), mark, node});
+        if (number)
+            numbers.push_back(*number);
+        else if (++wrong == kMostListed)
+            break;
+    }
+    if (wrong == kMostListed)
+        reading.error(list.key_mark,
+                      "too many errors in '" + list.key + "'; the rest of it is not read");
+    if (wrong > 0) return std::nullopt;
+    if (numbers.empty()) {
+        reading.error(list.mark(), "'" + list.key + "' holds no entries", kStepsExample);
+        return std::nullopt;
+    }
+    return numbers;
+}
+
+/// A time as it was given.
+struct GivenTime {
+    double number = 0.0;
+    std::string unit;
+};
+
+/// Splits a time that has already been read: "15 min".
+GivenTime split_time(const std::string& text) {
+    const std::size_t end = text.find_last_not_of(" \t") + 1;
+    const std::size_t unit = text.find_last_of("0123456789. \t", end - 1) + 1;
+    const std::size_t begin = text.find_first_not_of(" \t");
+    const std::size_t stop = text.find_last_not_of(" \t", unit - 1) + 1;
+    return {*parse_number(text.substr(begin, stop - begin)), text.substr(unit, end - unit)};
+}
+
+std::optional<double> read_duration(const Reading& reading, const Entry& entry) {
+    const auto hours = read_quantity(reading, entry, Dimension::time, Least::above_zero);
+    if (hours && *hours < kShortestStepH) {
+        reading.error(entry.mark(), entry.key + ": a step shorter than 1 ms cannot be computed",
+                      "check the number and its unit");
+        return std::nullopt;
+    }
+    return hours;
+}
+
+/// Edges in the unit they were given in, with the durations between them in h.
+struct Edges {
+    std::vector<double> value;
+    std::string unit;
+    std::vector<double> duration_h;
+};
+
+Edges equal_edges(const std::string& text, double every_h, std::size_t steps) {
+    const GivenTime every = split_time(text);
+    Edges edges;
+    edges.unit = every.unit;
+    for (std::size_t i = 0; i <= steps; ++i)
+        edges.value.push_back(static_cast<double>(i) * every.number);
+    edges.duration_h.assign(steps, every_h);
+    return edges;
+}
+
+/// The end of a step, later than `before` (h).
+std::optional<double> read_end(const Reading& reading, const Entry& entry, double before) {
+    const auto end = read_duration(reading, entry);
+    if (!end || *end - before >= kShortestStepH) return end;
+    reading.error(entry.mark(),
+                  entry.key + ": '" + entry.value.Scalar() + "' is not after the end before it",
+                  "ends count from the storm's start and rise from one to the next");
+    return std::nullopt;
+}
+
+/// The ends of steps, kept in their unit where it is one and the same, else in h.
+std::optional<Edges> read_ends(const Reading& reading, const Entry& list) {
+    double before = 0.0;
+    std::vector<GivenTime> given;
+    const auto ends_h = read_numbers(reading, list, [&](const Entry& entry) {
+        const auto end = read_end(reading, entry, before);
+        if (end) {
+            before = *end;
+            given.push_back(split_time(entry.value.Scalar()));
+        }
+        return end;
+    });
+    if (!ends_h) return std::nullopt;
+    const bool same = std::ranges::all_of(
+        given, [&](const GivenTime& time) { return time.unit == given.front().unit; });
+    Edges edges;
+    edges.unit = same ? given.front().unit : "h";
+    edges.value.push_back(0.0);
+    for (std::size_t i = 0; i < given.size(); ++i)
+        edges.value.push_back(same ? given[i].number : (*ends_h)[i]);
+    const Unit unit = *find_unit(edges.unit, Dimension::time);
+    for (std::size_t i = 0; i < given.size(); ++i)
+        edges.duration_h.push_back(unit.to_canonical(edges.value[i + 1] - edges.value[i]));
+    return edges;
+}
+
+/// Exactly one of two keys must be there; reports none and both.
+const Entry* one_of(const ClosedMap& map, std::string_view a, std::string_view b,
+                    const std::string& hint) {
+    const std::string either = "'" + std::string(a) + "' or '" + std::string(b) + "'";
+    if (map.has(a) && map.has(b)) {
+        map.reading().error(map.find(b)->key_mark,
+                            map.what() + " takes one of " + either + ", not both", hint);
+        return nullptr;
+    }
+    if (map.has(a)) return map.find(a);
+    if (map.has(b)) return map.find(b);
+    if (!map.is_misnamed(a) && !map.is_misnamed(b))
+        map.reading().error(map.owner_mark(), map.what() + " needs " + either, hint);
+    return nullptr;
+}
+
+/// The unit of the numbers: one of depth for depths, one of rate for intensities.
+std::optional<Unit> read_rain_unit(const ClosedMap& map, Dimension dimension) {
+    const bool depths = dimension == Dimension::depth;
+    const std::string example = depths ? "mm" : "mm/h";
+    const Entry* entry = map.require("unit", example);
+    if (entry == nullptr) return std::nullopt;
+    const auto name = read_text(map.reading(), *entry, "write 'unit: " + example + "'");
+    if (!name) return std::nullopt;
+    const auto unit = find_unit(*name, dimension);
+    if (unit) return unit;
+    const bool other = find_unit(*name, depths ? Dimension::rate : Dimension::depth).has_value();
+    std::string hint = "units: " + std::string(accepted_units(dimension));
+    if (other)
+        hint = depths ? "for numbers in " + *name + " write 'intensities' in place of 'depths'"
+                      : "for numbers in " + *name + " write 'depths' in place of 'intensities'";
+    map.reading().error(
+        entry->mark(), "unit: '" + *name + "' is not a unit of " + (depths ? "depth" : "intensity"),
+        hint);
+    return std::nullopt;
+}
+
+std::optional<Edges> read_edges(const ClosedMap& map, const Entry& time, std::size_t steps) {
+    if (time.key == "ends") return read_ends(map.reading(), time);
+    const auto every_h = read_duration(map.reading(), time);
+    if (!every_h) return std::nullopt;
+    return equal_edges(time.value.Scalar(), *every_h, steps);
+}
+
+/// The numbers of a list of depths or intensities, in mm or mm/h.
+std::optional<std::vector<double>> read_rain_numbers(const ClosedMap& map, const Entry& rain) {
+    const auto unit =
+        read_rain_unit(map, rain.key == "depths" ? Dimension::depth : Dimension::rate);
+    // Without a unit the numbers are still looked at, so that all errors come in one run.
+    const Unit factor = unit.value_or(Unit{});
+    auto numbers = read_numbers(map.reading(), rain, [&](const Entry& entry) {
+        const std::string hint = "write a plain number of zero or more; 'unit' says the unit once";
+        auto number = read_bare(map.reading(), entry, hint);
+        if (number) number = factor.to_canonical(*number);
+        if (number && !(*number <= kLargestValue)) {
+            map.reading().error(entry.mark(), entry.key + ": too large to compute with", hint);
+            number.reset();
+        }
+        return number;
+    });
+    if (!unit) numbers.reset();
+    return numbers;
+}
+
+bool match(const Reading& reading, const Edges& edges, const Entry& rain, std::size_t numbers) {
+    if (edges.duration_h.size() == numbers) return true;
+    reading.error(rain.mark(),
+                  "'ends' holds " + std::to_string(edges.duration_h.size()) + " entries and '" +
+                      rain.key + "' " + std::to_string(numbers),
+                  "write one number for each step");
+    return false;
+}
+
+}  // namespace
+
+std::optional<Hyetograph> read_steps(const Reading& reading, const Entry& entry) {
+    const auto map = ClosedMap::read(reading, entry, "steps", kStepsKeys, kStepsExample);
+    if (!map) return std::nullopt;
+    const Entry* time = one_of(*map, "every", "ends",
+                               "write 'every: 5 min' for equal steps, or 'ends: [5 min, 12 min]'");
+    const Entry* rain = one_of(*map, "depths", "intensities", kStepsExample);
+    std::optional<std::vector<double>> numbers;
+    if (rain != nullptr) numbers = read_rain_numbers(*map, *rain);
+    if (time == nullptr) return std::nullopt;
+    const auto edges = read_edges(*map, *time, numbers ? numbers->size() : 0);
+    if (!edges || !numbers || !match(reading, *edges, *rain, numbers->size())) return std::nullopt;
+    if (rain->key == "intensities")
+        for (std::size_t i = 0; i < numbers->size(); ++i)
+            (*numbers)[i] *= edges->duration_h[i];
+    Hyetograph hyetograph = make_hyetograph(edges->value, edges->unit, *std::move(numbers));
+    // From the duration as given: differences of edges such as 0.3 h would differ in the last bit.
+    hyetograph.duration_h = edges->duration_h;
+    return hyetograph;
+}
+
+}  // namespace rainledger

@@ -1,0 +1,30 @@
+#pragma once
+
+#include <optional>
+#include <string>
+#include <vector>
+
+#include "rainledger/scenario/scenario.hpp"
+#include "scenario/yaml.hpp"
+
+// The storms of a scenario: hyetograph files and steps written out.
+namespace rainledger {
+
+/// A storm with the place of its name. Where something in it was wrong, and reported, its rain may
+/// be empty.
+struct ReadStorm {
+    Storm storm;
+    Place place;
+};
+
+/// The storms under `storm` or `storms` of the scenario's top level.
+[[nodiscard]] std::vector<ReadStorm> read_storms(const ClosedMap& scenario);
+
+/// The rain of `steps: {...}`.
+[[nodiscard]] std::optional<Hyetograph> read_steps(const Reading& reading, const Entry& entry);
+
+/// The rain of `hyetograph: ...`; `described_as` is set to the file it came from.
+[[nodiscard]] std::optional<Hyetograph> read_hyetograph(const Reading& reading, const Entry& entry,
+                                                        std::string& described_as);
+
+}  // namespace rainledger

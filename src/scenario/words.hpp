@@ -1,0 +1,65 @@
+#pragma once
+
+#include <array>
+#include <optional>
+#include <span>
+#include <string>
+#include <string_view>
+
+// The words of the scenario YAML: the closed list of keys of every map, and the trade's other words
+// for them. The reader and the JSON Schema both follow these lists.
+namespace rainledger {
+
+using Words = std::span<const std::string_view>;
+
+inline constexpr auto kScenarioKeys =
+    std::to_array<std::string_view>({"title", "storm", "storms", "surfaces"});
+
+inline constexpr auto kStormKeys =
+    std::to_array<std::string_view>({"hyetograph", "steps", "multiply_by", "continue_for"});
+inline constexpr auto kHyetographKeys =
+    std::to_array<std::string_view>({"file", "time", "rain", "unit", "time_unit", "kind", "stamp",
+                                     "every", "zone", "gaps", "missing"});
+inline constexpr auto kStepsKeys =
+    std::to_array<std::string_view>({"every", "ends", "depths", "intensities", "unit"});
+inline constexpr auto kRainKinds =
+    std::to_array<std::string_view>({"depth", "intensity", "cumulative"});
+inline constexpr auto kStamps = std::to_array<std::string_view>({"start", "end"});
+inline constexpr auto kGaps = std::to_array<std::string_view>({"dry"});
+
+inline constexpr auto kSurfaceKeys =
+    std::to_array<std::string_view>({"area", "drains_to", "interception", "depression_storage",
+                                     "ponded_water", "losses", "runs_onto"});
+inline constexpr auto kReservedNames =
+    std::to_array<std::string_view>({"site", "storm", "storms", "table"});
+inline constexpr auto kPondedWater = std::to_array<std::string_view>({"infiltrates", "held"});
+
+inline constexpr std::string_view kImpervious = "impervious";
+inline constexpr auto kLaws = std::to_array<std::string_view>(
+    {"horton", "green_ampt", "philip", "constant_rate", "phi_index", "curve_number"});
+inline constexpr auto kHortonKeys = std::to_array<std::string_view>(
+    {"initial_capacity", "final_capacity", "decay", "follows", "recovery"});
+inline constexpr auto kFollows =
+    std::to_array<std::string_view>({"infiltrated_depth", "elapsed_time"});
+inline constexpr auto kGreenAmptKeys = std::to_array<std::string_view>(
+    {"effective_conductivity", "wetting_front_suction", "moisture_deficit", "suction_deficit",
+     "storage_limit", "barrier_rate"});
+inline constexpr auto kPhilipKeys = std::to_array<std::string_view>({"sorptivity", "steady_term"});
+inline constexpr auto kConstantRateKeys = std::to_array<std::string_view>({"rate", "initial_loss"});
+inline constexpr auto kPhiIndexKeys = std::to_array<std::string_view>({"observed_excess"});
+inline constexpr auto kCurveNumberKeys = std::to_array<std::string_view>(
+    {"number", "initial_abstraction_ratio", "tabulated_ratio", "antecedent"});
+inline constexpr auto kConditions = std::to_array<std::string_view>({"I", "II", "III"});
+
+/// The word in `known` for what the trade also calls `typed`; nothing if `typed` is no such word or
+/// its counterpart is not known here.
+[[nodiscard]] std::optional<std::string_view> synonym(std::string_view typed, Words known);
+
+/// The known word probably meant by an unknown one: its counterpart here or the nearest.
+[[nodiscard]] std::optional<std::string_view> probably_meant(std::string_view typed, Words known);
+
+/// What to write instead of an unknown word: its counterpart here, the place that it belongs to,
+/// the nearest known word, or all of them.
+[[nodiscard]] std::string way_out(std::string_view typed, Words known);
+
+}  // namespace rainledger

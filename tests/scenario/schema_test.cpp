@@ -1,0 +1,84 @@
+#include <set>
+#include <string>
+
+#include <nlohmann/json.hpp>
+
+#include "rainledger/base/quantity.hpp"
+#include "scenario/read_text.hpp"
+#include "scenario/words.hpp"
+#include "test.hpp"
+
+namespace rainledger {
+namespace {
+
+using Keys = std::set<std::string>;
+
+Keys keys_of(Words words) {
+    return {words.begin(), words.end()};
+}
+
+Keys properties_of(const nlohmann::json& map) {
+    CHECK(map.at("additionalProperties") == false);
+    Keys keys;
+    for (const auto& [key, value] : map.at("properties").items())
+        keys.insert(key);
+    return keys;
+}
+
+nlohmann::json schema() {
+    return nlohmann::json::parse(scenario_schema());
+}
+
+}  // namespace
+
+TEST_CASE("the schema knows the keys that the reader knows") {
+    const nlohmann::json all = schema();
+    const nlohmann::json& maps = all.at("$defs");
+    CHECK(properties_of(all) == keys_of(kScenarioKeys));
+    CHECK(properties_of(maps.at("storm")) == keys_of(kStormKeys));
+    CHECK(properties_of(maps.at("hyetograph")) == keys_of(kHyetographKeys));
+    CHECK(properties_of(maps.at("steps")) == keys_of(kStepsKeys));
+    CHECK(properties_of(maps.at("surface")) == keys_of(kSurfaceKeys));
+    CHECK(properties_of(maps.at("law")) == keys_of(kLaws));
+    CHECK(properties_of(maps.at("horton")) == keys_of(kHortonKeys));
+    CHECK(properties_of(maps.at("green_ampt")) == keys_of(kGreenAmptKeys));
+    CHECK(properties_of(maps.at("philip")) == keys_of(kPhilipKeys));
+    CHECK(properties_of(maps.at("constant_rate")) == keys_of(kConstantRateKeys));
+    CHECK(properties_of(maps.at("phi_index")) == keys_of(kPhiIndexKeys));
+    CHECK(properties_of(maps.at("curve_number")) == keys_of(kCurveNumberKeys));
+}
+
+TEST_CASE("every key of the schema is described and its text ends in a newline") {
+    const std::string text = scenario_schema();
+    CHECK(text.back() == '\n');
+    const nlohmann::json all = schema();
+    for (const auto& [name, map] : all.at("$defs").items())
+        for (const auto& [key, value] : map.at("properties").items()) {
+            INFO(name << "." << key);
+            CHECK((value.contains("description") || value.contains("$ref")));
+        }
+}
+
+TEST_CASE("the schema asks for the keys that the reader misses") {
+    const nlohmann::json all = schema();
+    const nlohmann::json& maps = all.at("$defs");
+    CHECK(all.at("required") == nlohmann::json::array({"surfaces"}));
+    CHECK(maps.at("surface").at("required") == nlohmann::json::array({"area", "losses"}));
+    CHECK(maps.at("green_ampt").at("required") ==
+          nlohmann::json::array({"effective_conductivity"}));
+    CHECK(maps.at("green_ampt").at("dependentRequired").at("barrier_rate") ==
+          nlohmann::json::array({"storage_limit"}));
+    for (const auto& [name, map] : maps.items()) {
+        if (!map.contains("required") || name == "surface" || name == "steps" ||
+            name == "hyetograph")
+            continue;
+        const std::string problem = problems(with_losses("{" + name + ": {}}"));
+        for (const auto& key : map.at("required")) {
+            INFO(name);
+            CHECK_THAT(problem,
+                       Contains("'" + key.get<std::string>() + "' is missing from " + name));
+        }
+    }
+}
+
+}  // namespace rainledger
