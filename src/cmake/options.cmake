@@ -15,6 +15,9 @@ if(RAINLEDGER_DEVELOPER)
 endif()
 # g++ 12 warns falsely about overlapping copies in string concatenation (GCC bug 105651).
 target_compile_options(rainledger_options INTERFACE $<$<CXX_COMPILER_ID:GNU>:-Wno-restrict>)
+if(RAINLEDGER_FEW_CASES)
+  target_compile_definitions(rainledger_options INTERFACE RAINLEDGER_FEW_CASES)
+endif()
 if(RAINLEDGER_SANITIZE)
   target_compile_options(rainledger_options INTERFACE
     -fsanitize=${RAINLEDGER_SANITIZE} -fno-sanitize-recover=all -fno-omit-frame-pointer -D_GLIBCXX_ASSERTIONS)

@@ -1,0 +1,80 @@
+#include "cli/program.hpp"
+
+#include <array>
+#include <string_view>
+
+#include "cli/arguments.hpp"
+#include "cli/help.hpp"
+#include "cli/losses_command.hpp"
+#include "cli/losses_options.hpp"
+#include "cli/terminal.hpp"
+#include "rainledger/base/suggest.hpp"
+#include "rainledger/report/version.hpp"
+#include "rainledger/scenario/scenario.hpp"
+
+namespace rainledger {
+namespace {
+
+using Words = std::span<const std::string>;
+
+ExitStatus wrong_usage(std::string_view command, std::string_view problem) {
+    print_wrong_usage(command, problem);
+    return ExitStatus::wrong_usage;
+}
+
+ExitStatus show(std::string_view text) {
+    std::string problem;
+    if (write_results(text, problem)) return ExitStatus::done;
+    Messages(false).error("cannot write standard output: " + problem);
+    return ExitStatus::file_trouble;
+}
+
+ExitStatus losses(Words words) {
+    if (const HelpWanted page = help_wanted(words); page != HelpWanted::none)
+        return show(losses_help(page));
+    std::string problem;
+    const auto options = read_losses_options(words, problem);
+    if (!options) return wrong_usage("losses", problem);
+    return run_losses(*options);
+}
+
+ExitStatus schema(Words words) {
+    if (const HelpWanted page = help_wanted(words); page != HelpWanted::none)
+        return show(schema_help(page));
+    const Arguments arguments = sort_arguments(words, {});
+    if (!arguments.problem.empty()) return wrong_usage("schema", arguments.problem);
+    if (!arguments.words.empty())
+        return wrong_usage("schema", "takes no '" + arguments.words.front() + "'");
+    return show(scenario_schema());
+}
+
+struct Command {
+    std::string_view name;
+    ExitStatus (*run)(Words);
+};
+constexpr std::array kCommands{Command{"losses", losses}, Command{"schema", schema}};
+
+ExitStatus no_command(Words words) {
+    if (words.empty()) return wrong_usage("", "no command given");
+    if (const HelpWanted page = help_wanted(words.first(1)); page != HelpWanted::none)
+        return show(program_help(page));
+    const std::string& first = words.front();
+    if (first == "--version") return show("rainledger " + std::string(version()) + "\n");
+    if (first.starts_with('-'))
+        return wrong_usage(
+            "", "unknown option '" + first + "'; options of a command stand after the command");
+    std::vector<std::string_view> names;
+    for (const Command& command : kCommands)
+        names.push_back(command.name);
+    return wrong_usage("", "unknown command '" + first + "'; " + suggestion(first, names));
+}
+
+}  // namespace
+
+ExitStatus run_program(Words words) {
+    for (const Command& command : kCommands)
+        if (!words.empty() && words.front() == command.name) return command.run(words.subspan(1));
+    return no_command(words);
+}
+
+}  // namespace rainledger
