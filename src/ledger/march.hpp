@@ -129,6 +129,7 @@ public:
 
     void run(const Hyetograph& rain, const MarchInput& input) {
         for (std::size_t step = 0; step < rain.steps(); ++step) {
+            if (input.run_on == nullptr && passes_quietly(rain, step)) continue;
             const double rate = rain.intensity_mm_per_h(step);
             longest_excess_ = input.cuts > 1.0 ? rain.duration_h[step] / input.cuts : kNever;
             book_.begin(step, rain.depth_mm[step]);
@@ -143,6 +144,28 @@ public:
     }
 
 private:
+    /// A step through which nothing happens but rain infiltrating, as most do: the same as the way
+    /// through piece() and spell(), without their book-keeping. False, with nothing done,
+    /// otherwise.
+    bool passes_quietly(const Hyetograph& rain, std::size_t step) {
+        const double dt = rain.duration_h[step];
+        const double depth = rain.depth_mm[step];
+        if (state_.ponded || !initial_loss_.is_full()) return false;
+        if (depth > 0.0) {
+            if (!interception_.is_full()) return false;
+            const double w = depth / dt;
+            if (law_.time_below(state_.soil, w, dt) < dt * (1.0 - kEndTolerance)) return false;
+            law_.advance_below(state_.soil, w, dt);
+        } else {
+            law_.rest(state_.soil, dt);
+        }
+        recorder_.step_begins(step);
+        recorder_.outflow(dt, 0.0);
+        recorder_.step_ends(step, Accounts{depth, 0.0, 0.0, depth, state_.depth_mm, 0.0},
+                            [&] { return law_.capacity(state_.soil); });
+        return true;
+    }
+
     /// Constant rain and run-on from `from` to `to`. Interception takes rain, not run-on; an
     /// initial loss then takes whatever comes, the soil resting meanwhile.
     void piece(double from, double to, double rain_rate, double run_on_rate) {

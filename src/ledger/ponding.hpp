@@ -64,6 +64,16 @@ public:
         left_ = duration_h;
         smallest_ = kEndTolerance * duration_h;
         longest_excess_ = longest_excess_h;
+        // Most spells of most storms are free from end to end; the rest is kept out of line.
+        if (!state_.ponded && !falls_within(w)) {
+            take_all(w, left_);
+        } else {
+            eventful_spell(w);
+        }
+    }
+
+private:
+    [[gnu::noinline]] void eventful_spell(double w) {
         bool fallen = false;  // capacity has fallen to w in this spell: it is rising to the end
         while (left_ > 0.0) {
             if (!state_.ponded) {
@@ -76,20 +86,24 @@ public:
         }
     }
 
-private:
+    [[nodiscard]] bool falls_within(double w) const {
+        return law_.time_below(state_.soil, w, left_) < left_ - smallest_;
+    }
+
+    void take_all(double w, double h) {
+        if (w > 0.0) {
+            law_.advance_below(state_.soil, w, h);
+        } else {
+            law_.rest(state_.soil, h);
+        }
+        pass(h, w * h, 0.0);
+    }
+
     /// Below capacity until it has fallen to w; true if it has.
     bool free(double w) {
-        const double until = law_.time_below(state_.soil, w, left_);
-        const bool falls = until < left_ - smallest_;
-        const double h = falls ? until : left_;
-        if (h > 0.0) {
-            if (w > 0.0) {
-                law_.advance_below(state_.soil, w, h);
-            } else {
-                law_.rest(state_.soil, h);
-            }
-            pass(h, w * h, 0.0);
-        }
+        const bool falls = falls_within(w);
+        const double h = falls ? law_.time_below(state_.soil, w, left_) : left_;
+        if (h > 0.0) take_all(w, h);
         if (falls) {
             state_.ponded = true;
             events_.ponding_starts(at_);
