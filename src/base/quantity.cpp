@@ -248,7 +248,10 @@ ParsedQuantity parse_quantity(std::string_view text, Dimension dimension) {
                              "' (units: " + std::string(accepted_units(dimension)) + ")";
     const NumberAndUnit parts = split_number(trimmed(text));
     const auto number = parse_number(parts.number);
-    if (!number) return refused(quoted(text) + " is not a " + what, hint);
+    if (!number) {
+        const std::string_view article = what.starts_with('a') ? "an" : "a";
+        return refused(quoted(text) + " is not " + std::string(article) + " " + what, hint);
+    }
     if (parts.unit.empty()) return refused(quoted(text) + " has no unit", hint);
     const auto unit = find_unit(parts.unit, dimension);
     if (!unit) return refused(quoted(parts.unit) + " is not a unit of " + what, hint);

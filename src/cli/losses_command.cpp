@@ -51,14 +51,12 @@ ExitStatus refuse(const Messages& messages, const Diagnostics& diagnostics) {
     return any_wrong ? ExitStatus::wrong_input : ExitStatus::file_trouble;
 }
 
-/// The rain files of a scenario, as the storms describe where their rain comes from.
+/// The rain files of a scenario, found as the scenario's reader finds them.
 std::vector<std::string> rain_files(const Scenario& scenario, const std::string& path) {
-    constexpr std::string_view kFile = "file ";
     const std::filesystem::path folder = std::filesystem::path(path).parent_path();
     std::vector<std::string> files;
     for (const Storm& storm : scenario.storms)
-        if (storm.described_as.starts_with(kFile))
-            files.push_back((folder / storm.described_as.substr(kFile.size())).string());
+        if (!storm.file.empty()) files.push_back((folder / storm.file).string());
     return files;
 }
 

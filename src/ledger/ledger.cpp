@@ -14,11 +14,9 @@
 namespace rainledger {
 namespace {
 
-// Run-on below a giver whose excess varies within a stretch is handed over in pieces: their number
-// per step is doubled until no account moves by more than this, from the first number to the last.
-constexpr double kRunOnTolerance = 1.0e-6;  // mm
-constexpr double kFirstCuts = 4.0;
-constexpr double kMostCuts = 4096.0;
+// How far a receiver's cumulative supply may be from the true one inside a part of run-on, over its
+// own area. Accounts then stand within a few times this, also below several givers in a row.
+constexpr double kRunOnTolerance = 2.0e-7;  // mm
 
 /// True if the surface's excess can vary while its supply does not.
 bool excess_varies(const Surface& surface) {
@@ -42,11 +40,20 @@ std::vector<std::size_t> givers_first(const Site& site) {
     return order;
 }
 
-/// Every surface marched once, run-on handed over in `cuts` parts of a step where it varies.
+/// The largest depth over a receiver that a millimetre of excess of `giver` makes; 0: no receiver.
+double largest_hand_over(const Site& site, const Surface& giver) {
+    double largest = 0.0;
+    for (const RunsOnto& onto : giver.runs_onto)
+        largest =
+            std::max(largest, onto.share * giver.area_m2 / site.surfaces[onto.surface].area_m2);
+    return largest;
+}
+
+/// Every surface marched once, givers before receivers.
 class SiteMarch {
 public:
-    SiteMarch(const Site& site, const Hyetograph& rain, double cuts)
-        : site_(site), rain_(rain), cuts_(cuts), run_on_(site.surfaces.size()) {
+    SiteMarch(const Site& site, const Hyetograph& rain)
+        : site_(site), rain_(rain), run_on_(site.surfaces.size()) {
         out_.surfaces.resize(site.surfaces.size());
     }
 
@@ -61,18 +68,27 @@ private:
         const Surface& surface = site_.surfaces[index];
         const RateSeries arriving = std::move(run_on_[index]);
         const bool gives = !surface.runs_onto.empty();
-        const MarchInput input{arriving.empty() ? nullptr : &arriving,
-                               gives && excess_varies(surface) ? cuts_ : 1.0};
+        const double allowed_mm = gives && excess_varies(surface)
+                                      ? kRunOnTolerance / largest_hand_over(site_, surface)
+                                      : kNever;
+        const MarchInput input{arriving.empty() ? nullptr : &arriving, allowed_mm};
         const ConstantRate matched = matched_phi(index, input);
         RateSeries outflow;
         LedgerRecorder recorder(rain_, gives ? &outflow : nullptr);
         march_surface(surface, matched, rain_, input, recorder);
+        if (recorder.coarsest_mm() > 0.0) note_coarse(recorder.coarsest_mm() / allowed_mm);
         SurfaceLedger& ledger = out_.surfaces[index] = recorder.finish();
         if (std::holds_alternative<PhiIndex>(surface.losses))
             ledger.phi_index_mm_per_h = matched.rate_mm_per_h;
         for (const RunsOnto& onto : surface.runs_onto)
             add_scaled(run_on_[onto.surface], outflow,
                        onto.share * surface.area_m2 / site_.surfaces[onto.surface].area_m2);
+    }
+
+    void note_coarse(double times_allowed) {
+        const double difference = times_allowed * kRunOnTolerance;
+        if (!out_.coarse_run_on || out_.coarse_run_on->difference_mm < difference)
+            out_.coarse_run_on = CoarseRunOn{difference};
     }
 
     ConstantRate matched_phi(std::size_t index, const MarchInput& input) {
@@ -88,49 +104,9 @@ private:
 
     const Site& site_;
     const Hyetograph& rain_;
-    double cuts_;
     std::vector<RateSeries> run_on_;
     SiteLedger out_;
 };
-
-double moved_mm(const Accounts& one, const Accounts& other) {
-    return std::max({std::abs(one.run_on_mm - other.run_on_mm),
-                     std::abs(one.initial_loss_mm - other.initial_loss_mm),
-                     std::abs(one.infiltrated_mm - other.infiltrated_mm),
-                     std::abs(one.ponded_mm - other.ponded_mm),
-                     std::abs(one.excess_mm - other.excess_mm)});
-}
-
-/// The largest move of any account of any surface, step or total, between two marches.
-double moved_mm(const SiteLedger& one, const SiteLedger& other) {
-    double moved = 0.0;
-    for (std::size_t i = 0; i < one.surfaces.size(); ++i) {
-        const SurfaceLedger& a = one.surfaces[i];
-        const SurfaceLedger& b = other.surfaces[i];
-        moved = std::max(moved, moved_mm(a.total, b.total));
-        for (std::size_t step = 0; step < a.rows.size(); ++step)
-            moved = std::max(moved, moved_mm(a.rows[step].accounts, b.rows[step].accounts));
-    }
-    return moved;
-}
-
-SiteLedger march_site(const Site& site, const Hyetograph& rain) {
-    const std::vector<std::size_t> order = givers_first(site);
-    const bool hands_varying = std::ranges::any_of(site.surfaces, [](const Surface& surface) {
-        return !surface.runs_onto.empty() && excess_varies(surface);
-    });
-    SiteLedger ledger = SiteMarch(site, rain, kFirstCuts).run(order);
-    if (!hands_varying) return ledger;
-    double moved = 0.0;
-    for (double cuts = 2.0 * kFirstCuts; cuts <= kMostCuts; cuts *= 2.0) {
-        SiteLedger finer = SiteMarch(site, rain, cuts).run(order);
-        moved = moved_mm(ledger, finer);
-        ledger = std::move(finer);
-        if (moved <= kRunOnTolerance) return ledger;
-    }
-    ledger.coarse_run_on = CoarseRunOn{moved};
-    return ledger;
-}
 
 void add_row(LedgerRow& sum, const LedgerRow& part) {
     sum.accounts.rain_mm += part.accounts.rain_mm;
@@ -160,7 +136,7 @@ std::vector<LedgerRow> reported_rows(const std::vector<LedgerRow>& fine,
 }  // namespace
 
 SiteLedger keep_ledger(const Site& site, const Hyetograph& rain) {
-    SiteLedger ledger = march_site(site, rain);
+    SiteLedger ledger = SiteMarch(site, rain).run(givers_first(site));
     for (std::size_t i = 0; i < site.surfaces.size(); ++i) {
         SurfaceLedger& surface = ledger.surfaces[i];
         surface.figures =

@@ -19,13 +19,14 @@
 //   step_begins(step)
 //   ponding_starts(h), ponding_ends(h), runoff_starts(h)
 //   outflow(end_h, rate)           excess at a constant or mean rate since the piece before
+//   coarse(difference_mm)          a part of varying excess was left longer than allowed
 //   step_ends(step, accounts, capacity)   `capacity` is called only if the recorder wants it
 namespace rainledger {
 
 /// How a surface is marched beside its rain.
 struct MarchInput {
     const RateSeries* run_on = nullptr;  ///< over the surface's own area; none without
-    double cuts = 1.0;                   ///< parts of a step into which varying excess is told
+    double allowed_mm = kNever;          ///< see parts.hpp; infinite if nobody receives the excess
 };
 
 /// Calls `visit(from, to, run_on_rate)` for each piece of a step, times from the step's start; one
@@ -86,6 +87,7 @@ struct StepBook {
         }
         recorder.outflow(part.start_h + part.duration_h, part.excess_mm / part.duration_h);
     }
+    void coarse(double difference_mm) { recorder.coarse(difference_mm); }
     void ponding_starts(double h) {
         if (tells_ponding) recorder.ponding_starts(h);
     }
@@ -112,8 +114,9 @@ double initial_loss_of(const Law& law) {
 template <InfiltrationLaw Law, class Recorder>
 class March {
 public:
-    March(const Law& law, const Surface& surface, Recorder& recorder)
+    March(const Law& law, const Surface& surface, const MarchInput& input, Recorder& recorder)
         : law_(law),
+          run_on_(input.run_on),
           interception_(surface.interception_mm),
           initial_loss_(initial_loss_of(law)),
           state_{law.start(), 0.0, false},
@@ -121,19 +124,18 @@ public:
           ponding_(
               law,
               {surface.depression_storage_mm, surface.ponded_water == PondedWater::infiltrates},
-              state_, book_),
+              input.allowed_mm, state_, book_),
           recorder_(recorder) {}
 
     March(const March&) = delete;  // ponding_ refers to state_ and book_
     March& operator=(const March&) = delete;
 
-    void run(const Hyetograph& rain, const MarchInput& input) {
+    void run(const Hyetograph& rain) {
         for (std::size_t step = 0; step < rain.steps(); ++step) {
-            if (input.run_on == nullptr && passes_quietly(rain, step)) continue;
+            if (run_on_ == nullptr && passes_quietly(rain, step)) continue;
             const double rate = rain.intensity_mm_per_h(step);
-            longest_excess_ = input.cuts > 1.0 ? rain.duration_h[step] / input.cuts : kNever;
             book_.begin(step, rain.depth_mm[step]);
-            for_each_piece(input.run_on, step, rain.duration_h[step],
+            for_each_piece(run_on_, step, rain.duration_h[step],
                            [&](double from, double to, double run_on_rate) {
                                book_.accounts.run_on_mm += run_on_rate * (to - from);
                                piece(from, to, rate, run_on_rate);
@@ -190,32 +192,31 @@ private:
             if (!fills) return;
             from += h;
         }
-        ponding_.spell(from, w, to - from, longest_excess_);
+        ponding_.spell(from, to, w);
     }
 
     const Law& law_;
+    const RateSeries* run_on_;
     FillOnce interception_;
     FillOnce initial_loss_;
     PondState<Law> state_;
     StepBook<Recorder> book_;
     Ponding<Law, StepBook<Recorder>> ponding_;
     Recorder& recorder_;
-    double longest_excess_ = kNever;
 };
 
 /// The march of a curve-number surface: cumulative rain and run-on along the retention curve.
 template <class Recorder>
 class CurveNumberMarch {
 public:
-    CurveNumberMarch(const RetentionCurve& curve, Recorder& recorder)
-        : curve_(curve), book_{recorder, {}, false, false}, recorder_(recorder) {}
+    CurveNumberMarch(const RetentionCurve& curve, const MarchInput& input, Recorder& recorder)
+        : curve_(curve), input_(input), book_{recorder, {}, false, false}, recorder_(recorder) {}
 
-    void run(const Hyetograph& rain, const MarchInput& input) {
+    void run(const Hyetograph& rain) {
         for (std::size_t step = 0; step < rain.steps(); ++step) {
             const double rate = rain.intensity_mm_per_h(step);
-            longest_ = input.cuts > 1.0 ? rain.duration_h[step] / input.cuts : kNever;
             book_.begin(step, rain.depth_mm[step]);
-            for_each_piece(input.run_on, step, rain.duration_h[step],
+            for_each_piece(input_.run_on, step, rain.duration_h[step],
                            [&](double from, double to, double run_on_rate) {
                                book_.accounts.run_on_mm += run_on_rate * (to - from);
                                piece(from, to - from, rate + run_on_rate);
@@ -239,9 +240,18 @@ private:
             from += dry / w;
             h -= dry / w;
         }
-        const double parts = h <= longest_ ? 1.0 : std::ceil(h / longest_);
-        for (double i = 0.0; i < parts; ++i)
-            run_off(from + h * i / parts, h / parts, w);
+        if (input_.allowed_mm == kNever) {
+            run_off(from, h, w);
+            return;
+        }
+        const auto rate_after = [&](double part) {
+            return w * runoff_slope(curve_, P_ + w * part);
+        };
+        const double coarsest = for_each_part(h, input_.allowed_mm, rate_after, [&](double part) {
+            run_off(from, part, w);
+            from += part;
+        });
+        if (coarsest > input_.allowed_mm) recorder_.coarse(coarsest);
     }
 
     void abstract(double from, double h, double depth) {
@@ -258,10 +268,10 @@ private:
     }
 
     RetentionCurve curve_;
+    MarchInput input_;
     StepBook<Recorder> book_;
     Recorder& recorder_;
     double P_ = 0.0;
-    double longest_ = kNever;
 };
 
 }  // namespace rainledger

@@ -16,11 +16,11 @@ void march_surface(const Surface& surface, const ConstantRate& matched_phi, cons
     std::visit(
         [&]<class Law>(const Law& law) {
             if constexpr (std::is_same_v<Law, CurveNumber>) {
-                CurveNumberMarch<Recorder>(retention_curve(law), recorder).run(rain, input);
+                CurveNumberMarch<Recorder>(retention_curve(law), input, recorder).run(rain);
             } else if constexpr (std::is_same_v<Law, PhiIndex>) {
-                March<ConstantRate, Recorder>(matched_phi, surface, recorder).run(rain, input);
+                March<ConstantRate, Recorder>(matched_phi, surface, input, recorder).run(rain);
             } else {
-                March<Law, Recorder>(law, surface, recorder).run(rain, input);
+                March<Law, Recorder>(law, surface, input, recorder).run(rain);
             }
         },
         surface.losses);

@@ -13,7 +13,8 @@ constexpr double kLimitTolerance = 1.0e-9;
 double excess_at(double rate, const Surface& surface, const Hyetograph& rain,
                  const MarchInput& input) {
     TotalsRecorder recorder;
-    March<ConstantRate, TotalsRecorder>({rate, 0.0}, surface, recorder).run(rain, input);
+    const ConstantRate law{rate, 0.0};
+    March<ConstantRate, TotalsRecorder>(law, surface, input, recorder).run(rain);
     return recorder.total().excess_mm;
 }
 

@@ -1,9 +1,9 @@
 #pragma once
 
 #include <algorithm>
-#include <cmath>
 
 #include "ledger/find_instant.hpp"
+#include "ledger/parts.hpp"
 #include "rainledger/losses/law.hpp"
 
 // The ponding solution: soil and depression storage under a constant supply.
@@ -50,20 +50,27 @@ struct Stretch {
 
 /// Carries soil and storage through spells of constant supply. `Events` is told of every stretch
 /// and every change: stretch(Stretch), ponding_starts(h), ponding_ends(h), times from the step's
-/// start. A stretch with excess is at most `longest_excess_h` long, longer ones being told in equal
-/// parts (for run-on, whose receiver wants the rate in pieces).
+/// start. Excess that varies is told in parts short enough that each part's mean rate stands for it
+/// (see parts.hpp).
 template <InfiltrationLaw Law, class Events>
 class Ponding {
 public:
-    Ponding(const Law& law, Depression depression, PondState<Law>& state, Events& events)
-        : law_(law), depression_(depression), state_(state), events_(events) {}
+    /// `allowed_mm`: how far the excess told may be from the true one within a part; infinite if
+    /// nobody receives it.
+    Ponding(const Law& law, Depression depression, double allowed_mm, PondState<Law>& state,
+            Events& events)
+        : law_(law),
+          depression_(depression),
+          allowed_mm_(allowed_mm),
+          state_(state),
+          events_(events) {}
 
-    /// One spell: supply w mm/h from `start_h` for `duration_h` > 0.
-    void spell(double start_h, double w, double duration_h, double longest_excess_h) {
+    /// One spell: supply w mm/h from `start_h` to `end_h` > start_h.
+    void spell(double start_h, double end_h, double w) {
         at_ = start_h;
-        left_ = duration_h;
-        smallest_ = kEndTolerance * duration_h;
-        longest_excess_ = longest_excess_h;
+        end_ = end_h;
+        left_ = end_h - start_h;
+        smallest_ = kEndTolerance * left_;
         // Most spells of most storms are free from end to end; the rest is kept out of line.
         if (!state_.ponded && !falls_within(w)) {
             take_all(w, left_);
@@ -135,15 +142,18 @@ private:
     }
 
     void run_off(double w) {
-        if (left_ <= longest_excess_) {
+        if (allowed_mm_ == kNever) {
             run_off_for(w, left_);
             return;
         }
-        const double parts = std::ceil(left_ / longest_excess_);
-        const double h = left_ / parts;
-        for (double part = 1.0; part < parts; ++part)
-            run_off_for(w, h);
-        run_off_for(w, left_);
+        const auto rate_after = [&](double h) {
+            auto soil = state_.soil;
+            law_.advance_at_capacity(soil, h);
+            return law_.capacity(soil);
+        };
+        const double coarsest = for_each_part(
+            left_, allowed_mm_, rate_after, [&](double h) { run_off_for(w, std::min(h, left_)); });
+        if (coarsest > allowed_mm_) events_.coarse(coarsest);
     }
 
     void run_off_for(double w, double h) {
@@ -200,18 +210,24 @@ private:
 
     void pass(double h, double infiltrated, double excess) {
         events_.stretch({at_, h, infiltrated, excess});
-        at_ += h;
-        left_ = h >= left_ ? 0.0 : left_ - h;
+        if (h >= left_) {
+            at_ = end_;
+            left_ = 0.0;
+        } else {
+            at_ += h;
+            left_ -= h;
+        }
     }
 
     const Law& law_;
     Depression depression_;
+    double allowed_mm_;
     PondState<Law>& state_;
     Events& events_;
     double at_ = 0.0;
+    double end_ = 0.0;
     double left_ = 0.0;
     double smallest_ = 0.0;
-    double longest_excess_ = 0.0;
 };
 
 }  // namespace rainledger

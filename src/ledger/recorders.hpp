@@ -4,6 +4,7 @@
 #include <cmath>
 #include <cstddef>
 #include <optional>
+#include <utility>
 #include <vector>
 
 #include "ledger/run_on.hpp"
@@ -68,22 +69,23 @@ public:
         ledger_.rows.reserve(rain.steps());
     }
 
-    void step_begins(std::size_t step) { start_h_ = rain_.edges_h[step]; }
+    void step_begins(std::size_t step) { step_ = step; }
 
     void ponding_starts(double h) {
         // A pond that ends and starts at one instant has not ended.
-        if (!ledger_.ponding.empty() && ledger_.ponding.back().end_h == start_h_ + h) {
+        if (!ledger_.ponding.empty() && ledger_.ponding.back().end_h == instant_h(h)) {
             ledger_.ponding.back().end_h.reset();
         } else {
-            ledger_.ponding.push_back({start_h_ + h, std::nullopt});
+            ledger_.ponding.push_back({instant_h(h), std::nullopt});
         }
     }
     void ponding_ends(double h) {
         PondedInterval& interval = ledger_.ponding.back();
-        interval.end_h = start_h_ + h;
+        interval.end_h = instant_h(h);
         if (*interval.end_h <= interval.start_h) ledger_.ponding.pop_back();
     }
-    void runoff_starts(double h) { ledger_.runoff_start_h = start_h_ + h; }
+    void runoff_starts(double h) { ledger_.runoff_start_h = instant_h(h); }
+    void coarse(double difference_mm) { coarsest_mm_ = std::max(coarsest_mm_, difference_mm); }
 
     void outflow(double end_h, double rate) {
         if (outflow_ != nullptr) outflow_->add(end_h, rate);
@@ -99,6 +101,10 @@ public:
         if (outflow_ != nullptr) outflow_->end_step(rain_.duration_h[step]);
     }
 
+    /// The largest difference of a part of varying excess that was left longer than allowed; 0:
+    /// none.
+    [[nodiscard]] double coarsest_mm() const { return coarsest_mm_; }
+
     [[nodiscard]] SurfaceLedger finish() {
         ledger_.total = totals_.total();
         ledger_.closure_mm =
@@ -107,12 +113,20 @@ public:
     }
 
 private:
+    /// Elapsed time at `h` from the step's start; the step's end is the next one's start to the
+    /// last bit.
+    [[nodiscard]] double instant_h(double h) const {
+        if (h >= rain_.duration_h[step_]) return rain_.edges_h[step_ + 1];
+        return std::min(rain_.edges_h[step_] + h, rain_.edges_h[step_ + 1]);
+    }
+
     const Hyetograph& rain_;
     RateSeries* outflow_;
     SurfaceLedger ledger_;
     AccountTotals totals_;
-    double start_h_ = 0.0;
+    std::size_t step_ = 0;
     double ponded_before_mm_ = 0.0;
+    double coarsest_mm_ = 0.0;
 };
 
 /// Keeps totals and nothing else; plain sums, for speed.
@@ -122,6 +136,7 @@ public:
     void ponding_starts(double /*h*/) {}
     void ponding_ends(double /*h*/) {}
     void runoff_starts(double /*h*/) {}
+    void coarse(double /*difference_mm*/) {}
     void outflow(double /*end_h*/, double /*rate*/) {}
     template <class Capacity>
     void step_ends(std::size_t /*step*/, const Accounts& accounts, const Capacity& /*capacity*/) {

@@ -35,6 +35,14 @@ double cumulative_runoff_mm(const RetentionCurve& curve, double P) {
     return x > 0.0 ? x * x / (x + curve.retention_mm) : 0.0;
 }
 
+// With x = P - Ia, dQ/dP = 1 - (S/(x + S))^2 = x (x + 2 S)/(x + S)^2.
+double runoff_slope(const RetentionCurve& curve, double P) {
+    const double x = P - curve.initial_abstraction_mm;
+    const double S = curve.retention_mm;
+    if (S == 0.0) return x >= 0.0 ? 1.0 : 0.0;
+    return x > 0.0 ? x / (x + S) * ((x + 2.0 * S) / (x + S)) : 0.0;
+}
+
 double runoff_start_time(const RetentionCurve& curve, double rain_mm_per_h) {
     if (!(rain_mm_per_h > 0.0)) return std::numeric_limits<double>::infinity();
     return curve.initial_abstraction_mm / rain_mm_per_h;

@@ -79,8 +79,16 @@ double green_ampt_ponding_time(double K, double S, double rain_mm_per_h) {
     return GreenAmpt{K, S}.time_below({}, rain_mm_per_h, kNever);
 }
 
-double GreenAmpt::capacity(const State& state) const {
+// F, taken as the storage limit where it is short of it by a rounding: steps whose depths add up to
+// the limit have reached it.
+double GreenAmpt::depth_of(const State& state) const {
     const double F = state.infiltrated_mm;
+    if (!storage_limit_mm || F < *storage_limit_mm * (1.0 - kRateTolerance)) return F;
+    return std::max(F, *storage_limit_mm);
+}
+
+double GreenAmpt::capacity(const State& state) const {
+    const double F = depth_of(state);
     const double free = green_ampt_capacity(conductivity_mm_per_h, suction_deficit_mm, F);
     if (storage_limit_mm && F >= *storage_limit_mm) return std::min(barrier_rate_mm_per_h, free);
     return free;
@@ -108,14 +116,15 @@ double GreenAmpt::free_depth_beyond_barrier() const {
 
 double GreenAmpt::time_below_solved(const State& state, double supply) const {
     const double depth = depth_where_capacity_is(supply);
-    if (state.infiltrated_mm >= depth) return 0.0;
-    return depth == kNever ? kNever : (depth - state.infiltrated_mm) / supply;
+    const double F = depth_of(state);
+    if (F >= depth) return 0.0;
+    return depth == kNever ? kNever : (depth - F) / supply;
 }
 
 double GreenAmpt::time_at_capacity(const State& state, double rate) const {
     const double K = conductivity_mm_per_h;
     const double S = suction_deficit_mm;
-    const double F = state.infiltrated_mm;
+    const double F = depth_of(state);
     const double depth = depth_where_capacity_is(rate);
     if (F >= depth) return 0.0;
     if (depth == kNever) return kNever;
@@ -133,7 +142,7 @@ double GreenAmpt::time_at_capacity(const State& state, double rate) const {
 double GreenAmpt::advance_at_capacity(State& state, double dt) const {
     const double K = conductivity_mm_per_h;
     const double S = suction_deficit_mm;
-    const double from = state.infiltrated_mm;
+    const double from = depth_of(state);
     double grown = green_ampt_growth(K, S, from, dt);
     if (storage_limit_mm && K > 0.0 && from + grown > *storage_limit_mm) {
         // The same three stretches; each takes what it can of the time.
@@ -153,7 +162,7 @@ double GreenAmpt::advance_at_capacity(State& state, double dt) const {
         }
         if (left > 0.0) grown += green_ampt_growth(K, S, from + grown, left);
     }
-    state.infiltrated_mm += grown;
+    state.infiltrated_mm = from + grown;
     return grown;
 }
 

@@ -32,7 +32,11 @@ void write_rain(JsonWriter& json, const Storm& storm) {
     else
         json.null();
     json.member("starts_h", rain.edges_h.front());
-    json.member("source", storm.described_as);
+    json.key("file");
+    if (storm.file.empty())
+        json.null();
+    else
+        json.value(storm.file);
     json.member("multiply_by", storm.multiply_by);
     json.member("continued_h", storm.continued_h);
     json.member("taken_as_dry_h", rain.taken_as_dry_h);

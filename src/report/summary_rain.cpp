@@ -21,8 +21,9 @@ std::string rain_part(const Storm& storm, const Display& display) {
         fmt::format("  {} {} of rain in {}, at most {} {}\n", display.depth(total_depth_mm(rain)),
                     display.depth_unit(), duration_text(own_duration_h(rain)),
                     display.rate(peak_intensity_mm_per_h(rain)), display.rate_unit());
-    out += fmt::format("  in {} step{} ({})\n", rain.own_steps, rain.own_steps == 1 ? "" : "s",
-                       printable(storm.described_as));
+    out +=
+        fmt::format("  in {} step{} ({})\n", rain.own_steps, rain.own_steps == 1 ? "" : "s",
+                    storm.file.empty() ? "steps in the scenario" : "file " + printable(storm.file));
     if (rain.stamps) out += start_line(rain);
     if (storm.multiply_by != 1.0)
         out += fmt::format("  allowance: every depth multiplied by {}, already in these figures\n",

@@ -74,7 +74,7 @@ CsvLayout read_layout(const ClosedMap& map) {
 }  // namespace
 
 std::optional<Hyetograph> read_hyetograph(const Reading& reading, const Entry& entry,
-                                          std::string& described_as) {
+                                          std::string& file_name) {
     Entry file = entry;
     CsvLayout layout;
     if (entry.value.IsMap()) {
@@ -91,7 +91,7 @@ std::optional<Hyetograph> read_hyetograph(const Reading& reading, const Entry& e
         reading.error(file.mark(), "the file name is empty", kFileExample);
         return std::nullopt;
     }
-    described_as = "file " + *name;
+    file_name = *name;
     const std::string path = path_beside(reading.name(), *name);
     std::string problem;
     auto text = read_whole_file(path, problem);

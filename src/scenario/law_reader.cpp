@@ -105,7 +105,7 @@ std::optional<double> read_suction_deficit(const ClosedMap& map) {
 std::optional<Losses> read_green_ampt(const ClosedMap& map) {
     const auto K = required_rate(map, "effective_conductivity");
     const auto S = read_suction_deficit(map);
-    const auto limit = map.quantity("storage_limit", Dimension::depth, Least::above_zero);
+    const auto limit = map.quantity("storage_limit", Dimension::depth);
     const auto barrier = map.quantity("barrier_rate", Dimension::rate);
     warn_high_rate(map, "barrier_rate", barrier);
     if (map.has("barrier_rate") && !map.has("storage_limit") && !map.is_misnamed("storage_limit"))

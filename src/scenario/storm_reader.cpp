@@ -44,7 +44,7 @@ std::optional<Hyetograph> read_rain(const ClosedMap& map, Storm& storm) {
                             map.what() + " takes one of 'hyetograph' or 'steps', not both",
                             "keep the one that holds its rain");
     else if (hyetograph != nullptr)
-        return read_hyetograph(map.reading(), *hyetograph, storm.described_as);
+        return read_hyetograph(map.reading(), *hyetograph, storm.file);
     else if (steps != nullptr)
         return read_steps(map.reading(), *steps);
     else if (!map.is_misnamed("hyetograph") && !map.is_misnamed("steps"))
@@ -61,7 +61,6 @@ ReadStorm read_storm(const Reading& reading, const Entry& entry, std::string nam
     read.storm.name = std::move(name);
     const auto map = ClosedMap::read(reading, entry, what, kStormKeys, kStormExample);
     if (!map) return read;
-    read.storm.described_as = "steps in the scenario";
     read.storm.multiply_by = read_factor(*map);
     if (auto rain = read_rain(*map, read.storm)) {
         read.storm.rain = std::move(*rain);

@@ -23,8 +23,8 @@ struct ReadStorm {
 /// The rain of `steps: {...}`.
 [[nodiscard]] std::optional<Hyetograph> read_steps(const Reading& reading, const Entry& entry);
 
-/// The rain of `hyetograph: ...`; `described_as` is set to the file it came from.
+/// The rain of `hyetograph: ...`; `file_name` is set to the file as named.
 [[nodiscard]] std::optional<Hyetograph> read_hyetograph(const Reading& reading, const Entry& entry,
-                                                        std::string& described_as);
+                                                        std::string& file_name);
 
 }  // namespace rainledger

@@ -70,8 +70,9 @@ std::vector<std::string> result_warnings(const Storm& storm, const Site& site,
     }
     if (ledger.coarse_run_on)
         warnings.push_back(name_of("site", storm) +
-                           ": run-on below a surface that infiltrates still moved an account by " +
-                           shortest(ledger.coarse_run_on->moved_mm) + " mm at the finest cut");
+                           ": run-on below a surface that infiltrates is handed over in parts of a "
+                           "step that leave the accounts below it uncertain by " +
+                           shortest(ledger.coarse_run_on->difference_mm) + " mm");
     return warnings;
 }
 

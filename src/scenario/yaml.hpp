@@ -126,7 +126,6 @@ public:
     [[nodiscard]] const Reading& reading() const { return *reading_; }
     [[nodiscard]] const std::string& what() const { return what_; }
     [[nodiscard]] const YAML::Mark& owner_mark() const { return owner_mark_; }
-    [[nodiscard]] const std::vector<Entry>& entries() const { return entries_; }
 
 private:
     ClosedMap(const Reading& reading, const Entry& owner, std::string what)

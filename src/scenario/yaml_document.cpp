@@ -1,12 +1,17 @@
 #include "scenario/yaml_document.hpp"
 
 #include <array>
+#include <sstream>
 #include <string>
 #include <string_view>
-#include <vector>
+
+#include <yaml-cpp/eventhandler.h>
 
 namespace rainledger {
 namespace {
+
+constexpr const char* kLookAround =
+    "look at the indentation, colons, quotes and brackets here and just before";
 
 struct PlainWords {
     std::string_view parser;
@@ -37,28 +42,65 @@ std::string in_plain_words(const std::string& message) {
     return message;
 }
 
+/// Follows a parser through its documents, keeping where the last one began.
+class DocumentStarts : public YAML::EventHandler {
+public:
+    void OnDocumentStart(const YAML::Mark& mark) override { last_ = mark; }
+    void OnDocumentEnd() override {}
+    void OnNull(const YAML::Mark&, YAML::anchor_t) override {}
+    void OnAlias(const YAML::Mark&, YAML::anchor_t) override {}
+    void OnScalar(const YAML::Mark&, const std::string&, YAML::anchor_t,
+                  const std::string&) override {}
+    void OnSequenceStart(const YAML::Mark&, const std::string&, YAML::anchor_t,
+                         YAML::EmitterStyle::value) override {}
+    void OnSequenceEnd() override {}
+    void OnMapStart(const YAML::Mark&, const std::string&, YAML::anchor_t,
+                    YAML::EmitterStyle::value) override {}
+    void OnMapEnd() override {}
+
+    [[nodiscard]] const YAML::Mark& last() const { return last_; }
+
+private:
+    YAML::Mark last_;
+};
+
+/// Where a second document begins. Asked of the parser and not of YAML::LoadAll, which never ends
+/// on a stray comma: the parser goes on offering it as one more empty document.
+std::optional<YAML::Mark> second_document(const std::string& text) {
+    std::istringstream stream(text);
+    YAML::Parser parser(stream);
+    DocumentStarts starts;
+    if (!parser.HandleNextDocument(starts) || !parser.HandleNextDocument(starts))
+        return std::nullopt;
+    return starts.last();
+}
+
+/// Reports what follows the first document: a second one, or what cannot stand there at all.
+void refuse_rest(const Reading& reading, const YAML::Mark& mark) {
+    if (reading.at(mark).source_line.starts_with("---"))
+        reading.error(mark, "a second document begins here; a scenario is one document",
+                      "give each scenario a file of its own");
+    else
+        reading.error(mark, "this cannot be read as YAML: nothing of the kind can stand here",
+                      kLookAround);
+}
+
 }  // namespace
 
 std::optional<YAML::Node> read_document(const Reading& reading) {
-    std::vector<YAML::Node> documents;
     try {
-        documents = YAML::LoadAll(reading.text());
+        YAML::Node document = YAML::Load(reading.text());
+        if (const auto second = second_document(reading.text())) {
+            refuse_rest(reading, *second);
+            return std::nullopt;
+        }
+        if (document.IsDefined() && !document.IsNull()) return document;
+        reading.error(YAML::Mark::null_mark(), "the scenario is empty", kScenarioExample);
     } catch (const YAML::Exception& fault) {
         reading.error(fault.mark, "this cannot be read as YAML: " + in_plain_words(fault.msg),
-                      "look at the indentation, colons, quotes and brackets here and just before");
-        return std::nullopt;
+                      kLookAround);
     }
-    if (documents.empty() || (documents.size() == 1 && documents.front().IsNull())) {
-        reading.error(YAML::Mark::null_mark(), "the scenario is empty", kScenarioExample);
-        return std::nullopt;
-    }
-    if (documents.size() > 1) {
-        reading.error(documents[1].Mark(),
-                      "a second document begins here; a scenario is one document",
-                      "give each scenario a file of its own");
-        return std::nullopt;
-    }
-    return documents.front();
+    return std::nullopt;
 }
 
 }  // namespace rainledger

@@ -114,6 +114,37 @@ TEST_CASE("below a giver that infiltrates, volumes are exact and accounts hold t
     }
 }
 
+TEST_CASE("a receiver whose ponding falls inside a step is right, not settled by chance") {
+    // A bare soil pours onto a verge that ponds within the step. Marched with the giver's excess in
+    // 2 x 10^5 equal parts as the reference: the mean-rate error falls with their square.
+    const Hyetograph rain = storm_of(60.0, {60.0});
+    const Horton soil{{40.0, 5.0, 2.0}, 0.0};
+    const GreenAmpt verge{30.0, 40.0};
+    const Site site{
+        {surface_of("soil", 100.0, soil, {{1, 1.0}}), surface_of("verge", 100.0, verge)}};
+    const SurfaceLedger below = keep_ledger(site, rain).surfaces[1];
+
+    constexpr int kParts = 200000;
+    std::vector<double> edges{0.0};
+    std::vector<double> depths;
+    double before = 0.0;
+    for (int i = 1; i <= kParts; ++i) {
+        edges.push_back(static_cast<double>(i) / kParts);
+        // 60 mm/h exceeds f0 throughout: the soil's excess is rain less its curve.
+        const double excess = 60.0 * edges.back() - horton_cumulative(soil.curve, edges.back());
+        depths.push_back(60.0 / kParts + (excess - before));
+        before = excess;
+    }
+    Surface alone = surface_of("verge", 100.0, verge);
+    const SurfaceLedger fine =
+        keep_ledger({{alone}}, make_hyetograph(std::move(edges), "h", std::move(depths)))
+            .surfaces[0];
+    CHECK_THAT(below.total.infiltrated_mm, WithinAbs(fine.total.infiltrated_mm, 1e-6));
+    constexpr double kSecond = 1.0 / 3600.0;
+    CHECK_THAT(below.runoff_start_h.value(), WithinAbs(fine.runoff_start_h.value(), kSecond));
+    CHECK_THAT(below.ponding.at(0).start_h, WithinAbs(fine.ponding.at(0).start_h, kSecond));
+}
+
 TEST_CASE("run-on passes down a chain and nothing is lost on the way") {
     testing::Cases cases(20260307);
     for (int i = 0; i < 25; ++i) {

@@ -78,6 +78,21 @@ TEST_CASE("a storage limit brings the capacity down to the barrier's rate") {
     CHECK(law.capacity(state) == 2.0);
 }
 
+TEST_CASE("depths that add up to the storage limit have reached it") {
+    GreenAmpt law{10.0, 22.0, 6.13, 2.0};
+    GreenAmpt::State state = law.start();
+    for (int i = 0; i < 613; ++i)
+        law.advance_below(state, 1.0, 0.01);
+    CHECK(law.capacity(state) == 2.0);
+    CHECK(law.time_below(state, 5.0, 1.0) == 0.0);
+    CHECK(law.time_at_capacity(state, 5.0) == 0.0);
+    GreenAmpt none{10.0, 22.0, 0.0, 2.0};
+    CHECK(none.capacity(none.start()) == 2.0);
+    CHECK(none.time_below(none.start(), 3.0, 1.0) == 0.0);
+    state = none.start();
+    CHECK(none.advance_at_capacity(state, 0.5) == 1.0);
+}
+
 TEST_CASE("a barrier faster than the soil limits only for a while") {
     // Capacity 10 (1 + 22/F): at F = 5 it is 54; the barrier lets 20 through until F = 22.
     GreenAmpt law{10.0, 22.0, 5.0, 20.0};

@@ -52,7 +52,6 @@ inline Storm storm_of(Hyetograph rain) {
     Storm storm;
     storm.name = "storm";
     storm.rain = std::move(rain);
-    storm.described_as = "steps in the scenario";
     return storm;
 }
 

@@ -144,7 +144,7 @@ This is an estimate from assumed losses; local codes and a licensed engineer dec
 TEST_CASE("the summary says what was done to the storm") {
     Scenario scenario = sample::verge_and_parking(sample::two_stamped_steps());
     Storm& storm = scenario.storms[0];
-    storm.described_as = "file gauge.csv";
+    storm.file = "gauge.csv";
     storm.multiply_by = 1.2;
     storm.continued_h = 2.0;
     append_dry_time(storm.rain, 2.0);

@@ -72,7 +72,7 @@ surfaces:
     CHECK(scenario.title == "Tannery Lane car park");
     REQUIRE(scenario.storms.size() == 1);
     CHECK(scenario.storms[0].name == "storm");
-    CHECK(scenario.storms[0].described_as == "steps in the scenario");
+    CHECK(scenario.storms[0].file.empty());
     REQUIRE(scenario.site.surfaces.size() == 2);
     const Surface& verge = scenario.site.surfaces[0];
     CHECK(verge.name == "verge");
@@ -257,7 +257,7 @@ TEST_CASE("a scenario file names rain beside it") {
         UNSCOPED_INFO(render(diagnostic));
     REQUIRE(scenario);
     CHECK(scenario->title == "lane.yaml");
-    CHECK(scenario->storms[0].described_as == "file rain.csv");
+    CHECK(scenario->storms[0].file == "rain.csv");
     CHECK(scenario->storms[0].rain.depth_mm == std::vector<double>{0.4, 1.1});
     CHECK_THAT(scenario->storms[1].rain.depth_mm[1], WithinRel(1.1 * 25.4, 1e-15));
 }

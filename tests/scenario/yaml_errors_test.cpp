@@ -86,12 +86,27 @@ TEST_CASE("YAML that cannot be parsed is shown where it breaks") {
 )");
 }
 
-TEST_CASE("a second document is refused") {
+TEST_CASE("a second document is refused, and so is what cannot begin one") {
     CHECK(problems(R"(title: a
 ---
 title: b
+)") == R"(lane.yaml:2:1: error: a second document begins here; a scenario is one document
+    ---
+    ^
+    give each scenario a file of its own
+)");
+    CHECK(problems(R"(, title: a
+)") == R"(lane.yaml:1:1: error: this cannot be read as YAML: nothing of the kind can stand here
+    , title: a
+    ^
+    look at the indentation, colons, quotes and brackets here and just before
+)");
+    CHECK(problems(R"(title: a
+...
+---
+---
 )") == R"(lane.yaml:3:1: error: a second document begins here; a scenario is one document
-    title: b
+    ---
     ^
     give each scenario a file of its own
 )");

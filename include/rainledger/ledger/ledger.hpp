@@ -83,9 +83,10 @@ struct UnmatchedPhi {
     double most_mm = 0.0;  ///< the excess at rate zero
 };
 
-/// Run-on below a giver that infiltrates, still moving an account after the finest cut.
+/// Run-on below a giver that infiltrates, handed over in parts of a step that even the finest cut
+/// leaves coarser than intended: inside a part a receiver's supply may be off by this depth.
 struct CoarseRunOn {
-    double moved_mm = 0.0;
+    double difference_mm = 0.0;
 };
 
 /// The ledger of the site.

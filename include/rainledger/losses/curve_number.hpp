@@ -43,6 +43,8 @@ struct RetentionCurve {
 
 /// Q at cumulative P >= 0, mm.
 [[nodiscard]] double cumulative_runoff_mm(const RetentionCurve& curve, double P);
+/// dQ/dP at cumulative P >= 0: the share of further rain that runs off.
+[[nodiscard]] double runoff_slope(const RetentionCurve& curve, double P);
 /// Depth at which runoff begins under any rain (Ia), and its time under constant rain, h; infinite
 /// without rain.
 [[nodiscard]] double runoff_start_time(const RetentionCurve& curve, double rain_mm_per_h);

@@ -39,7 +39,7 @@ namespace rainledger {
 struct GreenAmpt {
     double conductivity_mm_per_h = 0.0;           ///< K >= 0
     double suction_deficit_mm = 0.0;              ///< S >= 0
-    std::optional<double> storage_limit_mm = {};  ///< > 0
+    std::optional<double> storage_limit_mm = {};  ///< >= 0
     double barrier_rate_mm_per_h = 0.0;           ///< >= 0
 
     struct State {
@@ -64,6 +64,7 @@ struct GreenAmpt {
     void rest(State& /*state*/, double /*dt*/) const {}
 
 private:
+    [[nodiscard]] double depth_of(const State& state) const;
     [[nodiscard]] double time_below_solved(const State& state, double supply) const;
     [[nodiscard]] double depth_where_capacity_is(double rate) const;
     [[nodiscard]] double free_depth_beyond_barrier() const;

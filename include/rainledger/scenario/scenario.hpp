@@ -17,7 +17,7 @@ struct Storm {
     Hyetograph rain;   ///< with multiply_by and continue_for applied
     double multiply_by = 1.0;
     double continued_h = 0.0;
-    std::string described_as;  ///< for the summary: "steps in the scenario", "file gauge.csv"
+    std::string file;  ///< the rain's file as the scenario names it; empty for steps written out
 };
 
 /// Where a surface stands in the scenario's text, for messages that only the march can give.

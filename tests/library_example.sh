@@ -1,0 +1,23 @@
+#!/usr/bin/env bash
+# Installs the build into a temporary place, builds docs/library against it as another project would,
+# runs it and compares what it prints with docs/library.md. library_example.sh SOURCE BUILD CXX
+set -euo pipefail
+source=$1
+build=$2
+compiler=$3
+
+place=$(mktemp -d)
+trap 'rm -rf "$place"' EXIT
+cmake --install "$build" --prefix "$place/installed" >/dev/null
+"$place/installed/bin/rainledger" --version
+cmake -S "$source/docs/library" -B "$place/example" -DCMAKE_BUILD_TYPE=Release \
+    -DCMAKE_CXX_COMPILER="$compiler" -DCMAKE_PREFIX_PATH="$place/installed" \
+    -DCMAKE_EXE_LINKER_FLAGS="${LIBRARY_EXAMPLE_LINK_FLAGS:-}" >/dev/null
+cmake --build "$place/example" | tail -n 1
+"$place/example/verge_example" | tee "$place/output"
+while IFS= read -r line; do
+    grep -qxF -- "$line" "$source/docs/library.md" || {
+        echo "docs/library.md does not show: $line"
+        exit 1
+    }
+done <"$place/output"
