@@ -64,6 +64,7 @@ ExitStatus no_command(Words words) {
         return wrong_usage(
             "", "unknown option '" + first + "'; options of a command stand after the command");
     std::vector<std::string_view> names;
+    names.reserve(std::size(kCommands));
     for (const Command& command : kCommands)
         names.push_back(command.name);
     return wrong_usage("", "unknown command '" + first + "'; " + suggestion(first, names));

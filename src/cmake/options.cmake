@@ -18,6 +18,9 @@ target_compile_options(rainledger_options INTERFACE $<$<CXX_COMPILER_ID:GNU>:-Wn
 if(RAINLEDGER_FEW_CASES)
   target_compile_definitions(rainledger_options INTERFACE RAINLEDGER_FEW_CASES)
 endif()
+if(RAINLEDGER_FUZZ)
+  target_compile_options(rainledger_options INTERFACE -fsanitize=fuzzer-no-link)
+endif()
 if(RAINLEDGER_SANITIZE)
   target_compile_options(rainledger_options INTERFACE
     -fsanitize=${RAINLEDGER_SANITIZE} -fno-sanitize-recover=all -fno-omit-frame-pointer -D_GLIBCXX_ASSERTIONS)

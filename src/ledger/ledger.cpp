@@ -153,8 +153,10 @@ ReportedLedger keep_ledger_every(const Site& site, const Hyetograph& rain, doubl
     const double end = rain.edges_h.back();
     // A report edge within a rounding of the end is the end.
     constexpr double kEdgeTolerance = 1.0e-9;
-    for (double k = 0.0; start + k * every_h < end - kEdgeTolerance; ++k)
-        out.edges_h.push_back(start + k * every_h);
+    const auto count = static_cast<std::size_t>(
+        std::max(1.0, std::ceil((end - start - kEdgeTolerance) / every_h)));
+    for (std::size_t k = 0; k < count; ++k)
+        out.edges_h.push_back(start + static_cast<double>(k) * every_h);
     out.edges_h.push_back(end);
 
     const CutHyetograph cut = cut_hyetograph(rain, out.edges_h);

@@ -84,8 +84,7 @@ void CsvStepMaker::add_end(const CsvRow& row) {
                             "if the times are starts, call the column start");
     }
     check_order(row, row.end);
-    if (steps_.rain.size() > 0 || !columns_.stamped)
-        note_length(row.end.value - steps_.edges.back());
+    if (!steps_.rain.empty() || !columns_.stamped) note_length(row.end.value - steps_.edges.back());
     add_edge(row.end);
     add_rain(row);
 }

@@ -41,12 +41,12 @@ void set_stamped_hours(Hyetograph& rain, std::size_t first) {
 /// Edges that extend `last` by `total` in steps of `step`, the very last one shorter where needed;
 /// a remainder within `same` of a whole step is no step of its own.
 std::vector<double> dry_edges(double last, double step, double total, double same) {
-    const double count = std::max(std::ceil((total - same) / step), 1.0);
+    const auto count = static_cast<std::size_t>(std::max(std::ceil((total - same) / step), 1.0));
     std::vector<double> edges;
-    edges.reserve(static_cast<std::size_t>(count));
-    for (double k = 1.0; k < count; ++k)
-        edges.push_back(last + k * step);
-    const double whole = count * step;
+    edges.reserve(count);
+    for (std::size_t k = 1; k < count; ++k)
+        edges.push_back(last + static_cast<double>(k) * step);
+    const double whole = static_cast<double>(count) * step;
     edges.push_back(last + (std::abs(total - whole) > same ? total : whole));
     return edges;
 }

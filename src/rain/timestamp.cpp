@@ -148,7 +148,8 @@ ParsedStamp parse_stamp(std::string_view text) {
         return refused(quoted(text) + " has an impossible UTC offset",
                        "offsets run from -18:00 to +18:00");
     const std::int64_t minutes = std::int64_t{60} * f.hour + f.minute;
-    const std::int64_t time_ms = minutes * kMsPerMinute + 1000 * f.second + f.millisecond;
+    const std::int64_t time_ms =
+        minutes * kMsPerMinute + std::int64_t{1000} * f.second + f.millisecond;
     ClockReading reading;
     reading.face_ms = to_ms(date::sys_days(day)).count() + time_ms;
     reading.offset_minutes = static_cast<std::int16_t>(offset);
