@@ -132,7 +132,7 @@ public:
 
     void run(const Hyetograph& rain) {
         for (std::size_t step = 0; step < rain.steps(); ++step) {
-            if (run_on_ == nullptr && passes_quietly(rain, step)) continue;
+            if (passes_quietly(rain, step)) continue;
             const double rate = rain.intensity_mm_per_h(step);
             book_.begin(step, rain.depth_mm[step]);
             for_each_piece(run_on_, step, rain.duration_h[step],
@@ -146,14 +146,19 @@ public:
     }
 
 private:
-    /// A step through which nothing happens but rain infiltrating, as most do: the same as the way
-    /// through piece() and spell(), without their book-keeping. False, with nothing done,
-    /// otherwise.
+    /// A step through which one thing happens, as through most: rain infiltrating, or a full store
+    /// running over. The same as the way through piece() and spell(), without their book-keeping.
+    /// False, with nothing done, for any other step.
     bool passes_quietly(const Hyetograph& rain, std::size_t step) {
+        if (run_on_ != nullptr || !initial_loss_.is_full()) return false;
         const double dt = rain.duration_h[step];
         const double depth = rain.depth_mm[step];
-        if (state_.ponded || !initial_loss_.is_full()) return false;
-        if (depth > 0.0) {
+        double infiltrated = depth;
+        if (state_.ponded) {
+            if (!interception_.is_full() || !book_.runs_off) return false;
+            if (!ponding_.runs_over(depth / dt)) return false;
+            infiltrated = law_.advance_at_capacity(state_.soil, dt);
+        } else if (depth > 0.0) {
             if (!interception_.is_full()) return false;
             const double w = depth / dt;
             if (law_.time_below(state_.soil, w, dt) < dt * (1.0 - kEndTolerance)) return false;
@@ -161,9 +166,10 @@ private:
         } else {
             law_.rest(state_.soil, dt);
         }
+        const double excess = std::max(0.0, depth - infiltrated);
         recorder_.step_begins(step);
-        recorder_.outflow(dt, 0.0);
-        recorder_.step_ends(step, Accounts{depth, 0.0, 0.0, depth, state_.depth_mm, 0.0},
+        recorder_.outflow(dt, excess / dt);
+        recorder_.step_ends(step, Accounts{depth, 0.0, 0.0, infiltrated, state_.depth_mm, excess},
                             [&] { return law_.capacity(state_.soil); });
         return true;
     }

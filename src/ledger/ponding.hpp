@@ -79,6 +79,13 @@ public:
         }
     }
 
+    /// True if a full store runs over all through a spell of supply w, and the excess may be told
+    /// whole.
+    [[nodiscard]] bool runs_over(double w) const {
+        return state_.ponded && state_.depth_mm >= depression_.limit_mm && allowed_mm_ == kNever &&
+               law_.time_at_capacity(state_.soil, w) <= 0.0;
+    }
+
 private:
     [[gnu::noinline]] void eventful_spell(double w) {
         bool fallen = false;  // capacity has fallen to w in this spell: it is rising to the end

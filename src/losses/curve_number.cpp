@@ -64,8 +64,9 @@ RunoffIncrement runoff_increment(const RetentionCurve& curve, double P, double d
     const double x0 = std::max(0.0, P - Ia);
     const double x1 = x0 + dx;
     const double denominator = (x0 + S) * (x1 + S);
-    out.infiltrated_mm = dx * (S / (x0 + S)) * (S / (x1 + S));
-    out.excess_mm = dx * (x0 * x1 + S * (x0 + x1)) / denominator;
+    const double scale = dx / denominator;
+    out.infiltrated_mm = S * S * scale;
+    out.excess_mm = (x0 * x1 + S * (x0 + x1)) * scale;
     return out;
 }
 

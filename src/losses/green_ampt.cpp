@@ -25,22 +25,27 @@ double minus_log1p(double x) {
 /// h = K dt/S from z = F0/S: the root of z r + (r - ln(1 + r)) = h.
 ///
 /// Solving for the increment instead of F keeps every digit of a small step, and F0 = 0 is no
-/// special case. r - ln(1 + r) is near r^2/2/(1 + 2r/3), which gives the start by a quadratic;
-/// Halley's method follows. The left side rises and is convex and the start is within a third of
-/// the root, so two or three steps do; the cap of 50 is never met.
+/// special case. r - ln(1 + r) is near r^2/2/(1 + 2r/3), which gives the start by a quadratic:
+/// within r^2/18 of the root for small r, within a third for large. Householder's method of fourth
+/// order follows; a step of 1e-4 leaves 1e-16. One step does for most, two or three for all; the
+/// cap of 50 is never met.
 double growth_increment(double z, double h) {
     const double linear = z - 2.0 / 3.0 * h;
-    const double root = std::sqrt(linear * linear + 4.0 * h * (2.0 / 3.0 * z + 0.5));
+    const double square = 2.0 / 3.0 * z + 0.5;
+    const double root = std::sqrt(linear * linear + 4.0 * h * square);
     // Two forms of the same root; each is used where it does not cancel.
-    double r =
-        linear >= 0.0 ? 2.0 * h / (linear + root) : (root - linear) / (2.0 * (2.0 / 3.0 * z + 0.5));
+    double r = linear >= 0.0 ? 2.0 * h / (linear + root) : (root - linear) / (2.0 * square);
     for (int i = 0; i < 50; ++i) {
-        const double slope = z + r / (1.0 + r);
+        const double inverse = 1.0 / (1.0 + r);
+        const double slope = z + r * inverse;
         const double newton = (z * r + minus_log1p(r) - h) / slope;
-        const double bend = 1.0 / (2.0 * slope * (1.0 + r) * (1.0 + r));
-        const double step = newton / (1.0 - newton * bend);
+        // Second and third derivatives, (1 + r)^-2 and -2 (1 + r)^-3, over 2 and 6 times the slope.
+        const double second = 0.5 * inverse * inverse / slope;
+        const double third = -2.0 / 3.0 * inverse * second;
+        const double step =
+            newton * (1.0 - second * newton) / (1.0 + newton * (third * newton - 2.0 * second));
         r -= step;
-        if (!(std::abs(step) > 1.0e-7 * r)) break;  // the step after a step of 1e-7 is below 1e-20
+        if (!(std::abs(step) > 1.0e-4 * r)) break;
     }
     return r;
 }

@@ -103,6 +103,7 @@ double Horton::time_at_capacity(const State& state, double rate) const {
 
 double Horton::time_below_solved(const State& state, double supply) const {
     if (!falls()) return constant_time(at_e(1.0), supply);
+    if (never_falls_to(curve, supply)) return kNever;
     const double then = e_at_rate(curve, supply);
     if (then >= state.e) return 0.0;
     const double room = depth_between(curve, state.e, then) - state.pending_mm;
@@ -111,10 +112,15 @@ double Horton::time_below_solved(const State& state, double supply) const {
 
 double Horton::advance_at_capacity(State& state, double dt) const {
     const double e = solved_e(state);
-    state = {e, 0.0};
+    state.e = e;
+    state.pending_mm = 0.0;
     if (!falls()) return at_e(e) * dt;
     const double x = curve.decay_per_h * dt;
-    const double change = std::expm1(-x);
+    if (dt != state.last_dt) {
+        state.last_dt = dt;
+        state.last_change = std::expm1(-x);
+    }
+    const double change = state.last_change;
     // 1 + expm1 keeps its digits while x is small and saves the second exponential.
     state.e = x < 0.5 ? e + e * change : e * std::exp(-x);
     return curve.final_capacity_mm_per_h * dt - drop() / curve.decay_per_h * e * change;
@@ -123,7 +129,8 @@ double Horton::advance_at_capacity(State& state, double dt) const {
 // f0 - fp shrinks by exp(-recovery dt), so 1 - E does.
 void Horton::recover(State& state, double dt) const {
     const double e = solved_e(state);
-    state = {1.0 - (1.0 - e) * std::exp(-recovery_per_h * dt), 0.0};
+    state.e = 1.0 - (1.0 - e) * std::exp(-recovery_per_h * dt);
+    state.pending_mm = 0.0;
 }
 
 double HortonElapsed::capacity(const State& state) const {

@@ -50,19 +50,19 @@ struct Horton {
     struct State {
         double e = 1.0;           ///< exp(-k te)
         double pending_mm = 0.0;  ///< depth infiltrated since e was solved
+        /// exp(-k dt) - 1 of the last time spent at capacity, and that time: equal steps share it.
+        double last_dt = 0.0;
+        double last_change = 0.0;
     };
 
     [[nodiscard]] State start() const { return {}; }
     [[nodiscard]] double capacity(const State& state) const;
     [[nodiscard]] double time_at_capacity(const State& state, double rate) const;
     [[nodiscard]] double time_below(const State& state, double supply, double within) const {
-        if (supply <= curve.final_capacity_mm_per_h * (1.0 + kRateTolerance) && falls())
-            return kNever;
         // |dfp/dF| = k (fp - fc)/fp <= k bounds the capacity from below without solving for te.
         const double floor =
             at_e(state.e) - curve.decay_per_h * (state.pending_mm + supply * within);
-        if (floor > supply) return kNever;
-        return time_below_solved(state, supply);
+        return floor > supply ? kNever : time_below_solved(state, supply);
     }
     double advance_at_capacity(State& state, double dt) const;
     void advance_below(State& state, double supply, double dt) const {
