@@ -3,6 +3,8 @@
 #include <algorithm>
 #include <utility>
 
+#include "rainledger/base/printable.hpp"
+
 namespace rainledger {
 namespace {
 
@@ -11,17 +13,6 @@ constexpr std::string_view kIndent = "    ";
 
 bool is_continuation(char c) {
     return (static_cast<unsigned char>(c) & 0xC0U) == 0x80U;
-}
-
-bool is_control(char c) {
-    const auto byte = static_cast<unsigned char>(c);
-    return byte < 0x20U || byte == 0x7FU;
-}
-
-std::string without_controls(std::string_view text) {
-    std::string out(text);
-    std::replace_if(out.begin(), out.end(), is_control, '?');
-    return out;
 }
 
 /// The source line and the caret below it; a long line is cut to a window around the caret.
@@ -39,8 +30,9 @@ std::string caret_lines(const Place& place) {
 
     const std::string_view lead = begin > 0 ? "..." : "";
     std::string shown{lead};
-    for (const char c : std::string_view(line).substr(begin, end - begin))
-        shown.push_back(c == '\t' ? ' ' : (is_control(c) ? '?' : c));
+    std::string window = line.substr(begin, end - begin);
+    std::ranges::replace(window, '\t', ' ');
+    shown += printable(window);
     if (end < line.size()) shown += "...";
 
     std::size_t pad = lead.size();
@@ -95,7 +87,7 @@ Place SourceText::at(std::size_t line, std::size_t column) const {
 
 std::string render(const Diagnostic& diagnostic, bool colour) {
     const Place& place = diagnostic.place;
-    std::string out = without_controls(place.file);
+    std::string out = printable(place.file);
     if (place.line > 0)
         out += ":" + std::to_string(place.line) + ":" + std::to_string(place.column);
     const bool is_error = diagnostic.severity == Severity::error;
@@ -104,11 +96,11 @@ std::string render(const Diagnostic& diagnostic, bool colour) {
     if (colour) out += is_error ? "\x1b[31m" : "\x1b[33m";
     out += word;
     if (colour) out += "\x1b[0m";
-    out += ": " + without_controls(diagnostic.message) + "\n";
+    out += ": " + printable(diagnostic.message) + "\n";
     if (place.line > 0 && !place.source_line.empty()) out += caret_lines(place);
     if (!diagnostic.hint.empty()) {
         out += kIndent;
-        out += without_controls(diagnostic.hint) + "\n";
+        out += printable(diagnostic.hint) + "\n";
     }
     return out;
 }

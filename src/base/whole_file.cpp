@@ -20,16 +20,6 @@ std::string last_error() {
     return std::system_category().message(errno);
 }
 
-bool write_all(int descriptor, std::string_view content) {
-    while (!content.empty()) {
-        const ssize_t written = ::write(descriptor, content.data(), content.size());
-        if (written < 0 && errno == EINTR) continue;
-        if (written <= 0) return false;
-        content.remove_prefix(static_cast<std::size_t>(written));
-    }
-    return true;
-}
-
 /// Permissions for the finished file: those of the file it replaces, else what the umask leaves.
 mode_t finished_mode(const std::string& target) {
     struct stat status {};
@@ -40,6 +30,16 @@ mode_t finished_mode(const std::string& target) {
 }
 
 }  // namespace
+
+int write_all(int descriptor, std::string_view content) {
+    while (!content.empty()) {
+        const ssize_t written = ::write(descriptor, content.data(), content.size());
+        if (written < 0 && errno == EINTR) continue;
+        if (written < 0) return errno;
+        content.remove_prefix(static_cast<std::size_t>(written));
+    }
+    return 0;
+}
 
 std::optional<std::string> read_whole_file(const std::string& path, std::string& problem) {
     const int descriptor = ::open(path.c_str(), O_RDONLY | O_CLOEXEC);
@@ -127,11 +127,9 @@ void WholeFile::discard() noexcept {
 }
 
 bool WholeFile::write(std::string_view content, std::string& problem) {
-    if (!write_all(descriptor_, content)) {
-        problem = last_error();
-        return false;
-    }
-    return true;
+    const int error = write_all(descriptor_, content);
+    if (error != 0) problem = std::system_category().message(error);
+    return error == 0;
 }
 
 bool WholeFile::commit(std::string& problem) {

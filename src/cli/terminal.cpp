@@ -8,21 +8,12 @@
 #include <fcntl.h>
 #include <unistd.h>
 
+#include "rainledger/base/whole_file.hpp"
+
 namespace rainledger {
 namespace {
 
 constexpr std::size_t kMostErrors = 50;
-
-/// 0, or why not all of `text` was written.
-int write_all(int descriptor, std::string_view text) {
-    while (!text.empty()) {
-        const ssize_t written = ::write(descriptor, text.data(), text.size());
-        if (written < 0 && errno == EINTR) continue;
-        if (written < 0) return errno;
-        text.remove_prefix(static_cast<std::size_t>(written));
-    }
-    return 0;
-}
 
 void print_error_text(std::string_view text) {
     // There is nowhere left to tell of a failure here.

@@ -113,16 +113,4 @@ std::string four_figures(double value) {
     return text;
 }
 
-std::string printable(std::string_view text) {
-    std::string out(text);
-    std::replace_if(
-        out.begin(), out.end(),
-        [](char c) {
-            const auto byte = static_cast<unsigned char>(c);
-            return byte < 0x20U || byte == 0x7FU;
-        },
-        '?');
-    return out;
-}
-
 }  // namespace rainledger

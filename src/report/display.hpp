@@ -3,6 +3,7 @@
 #include <string>
 #include <string_view>
 
+#include "rainledger/base/printable.hpp"
 #include "rainledger/base/quantity.hpp"
 #include "rainledger/report/summary.hpp"
 
@@ -42,8 +43,5 @@ private:
 
 /// A plain number to four figures at most, without zeros at its end.
 [[nodiscard]] std::string four_figures(double value);
-
-/// `text` with control characters shown as '?'.
-[[nodiscard]] std::string printable(std::string_view text);
 
 }  // namespace rainledger

@@ -12,6 +12,9 @@ namespace rainledger {
 [[nodiscard]] std::optional<std::string> read_whole_file(const std::string& path,
                                                          std::string& problem);
 
+/// Writes all of `content` to an open descriptor: 0, or the errno of what stopped it.
+[[nodiscard]] int write_all(int descriptor, std::string_view content);
+
 /// An output file in the making. It is written beside its destination under a temporary name and
 /// takes its own name only on commit; until then, and if it is never committed, the destination is
 /// untouched. A destination that exists and is no regular file (a pipe, a device) is written
