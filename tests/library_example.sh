@@ -10,7 +10,7 @@ place=$(mktemp -d)
 trap 'rm -rf "$place"' EXIT
 cmake --install "$build" --prefix "$place/installed" >/dev/null
 "$place/installed/bin/rainledger" --version
-cmake -S "$source/docs/library" -B "$place/example" -DCMAKE_BUILD_TYPE=Release \
+cmake -S "$source/docs/library" -B "$place/example" -G Ninja -DCMAKE_BUILD_TYPE=Release \
     -DCMAKE_CXX_COMPILER="$compiler" -DCMAKE_PREFIX_PATH="$place/installed" \
     -DCMAKE_EXE_LINKER_FLAGS="${LIBRARY_EXAMPLE_LINK_FLAGS:-}" >/dev/null
 cmake --build "$place/example" | tail -n 1

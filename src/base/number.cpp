@@ -1,5 +1,6 @@
 #include "rainledger/base/number.hpp"
 
+#include <algorithm>
 #include <array>
 #include <charconv>
 #include <cmath>
@@ -42,12 +43,17 @@ std::string fixed(double value, int decimals) {
 }
 
 std::string three_figures(double value) {
-    // The decimals follow from the value as rounded, so that 9.999 prints 10.0 and not 10.00.
-    for (int decimals = 3; decimals > 0; --decimals) {
-        const double scale = std::pow(10.0, decimals);
-        if (std::abs(std::round(value * scale)) < 1000.0) return fixed(value, decimals);
+    constexpr int kMostDecimals = 6;
+    if (!(std::abs(value) >= 0.5e-6)) return "0";
+    // The place of the first figure is that of the value as rounded: 9.999 prints 10.0, not 10.00.
+    int first = static_cast<int>(std::floor(std::log10(std::abs(value))));
+    const double unit = std::pow(10.0, first - 2);
+    if (std::round(std::abs(value) / unit) >= 1000.0) ++first;
+    if (first > 2) {
+        const double last = std::pow(10.0, first - 2);
+        return fixed(std::round(value / last) * last, 0);
     }
-    return fixed(value, 0);
+    return fixed(value, std::min(2 - first, kMostDecimals));
 }
 
 }  // namespace rainledger

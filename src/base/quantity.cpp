@@ -1,11 +1,14 @@
 #include "rainledger/base/quantity.hpp"
 
 #include <array>
+#include <cmath>
 #include <cstddef>
 #include <span>
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
 #include "rainledger/base/number.hpp"
+#include "rainledger/base/unit_spellings.hpp"
 
 // Conversion factors are exact by definition: inch 25.4 mm, foot 0.3048 m, acre 43,560 square feet,
 // mile 5,280 feet, US gallon 231 cubic inches (NIST Handbook 44, appendix C, from memory).
@@ -131,8 +134,42 @@ ParsedQuantity refused(std::string problem, std::string hint) {
     return {std::nullopt, std::move(problem), std::move(hint)};
 }
 
-std::string quoted(std::string_view text) {
-    return "'" + std::string(text) + "'";
+constexpr bool is_digit(char c) {
+    return c >= '0' && c <= '9';
+}
+
+/// Whether a number goes on after a decimal comma or a mark for thousands: "4,800 m2", "4 800 m2".
+bool goes_on(const NumberAndUnit& parts) {
+    if (parts.number.empty() || parts.unit.empty()) return false;
+    if (is_digit(parts.unit[0])) return true;
+    return (parts.unit[0] == ',' || parts.unit[0] == '\'') && parts.unit.size() > 1 &&
+           is_digit(parts.unit[1]);
+}
+
+constexpr const char* kPlainDigits = "write a decimal point, and no mark for thousands";
+
+/// "0:10" or "00:10:00" as hours, minutes and seconds, written with a unit: "10 min".
+std::optional<std::string> clock_time(std::string_view text) {
+    constexpr double kMostSeconds = 1.0e9;
+    double seconds = 0.0;
+    double weight = 3600.0;
+    for (int part = 0; part < 3; ++part, weight /= 60.0) {
+        const std::size_t colon = text.find(':');
+        if (part == 0 && colon == std::string_view::npos) return std::nullopt;
+        const std::string_view digits = text.substr(0, colon);
+        for (const char c : digits)
+            if (!is_digit(c)) return std::nullopt;
+        const auto number = parse_number(digits);
+        if (!number) return std::nullopt;
+        seconds += *number * weight;
+        if (colon == std::string_view::npos) {
+            if (!(seconds < kMostSeconds)) return std::nullopt;
+            const bool minutes = std::fmod(seconds, 60.0) == 0.0;
+            return minutes ? shortest(seconds / 60.0) + " min" : shortest(seconds) + " s";
+        }
+        text.remove_prefix(colon + 1);
+    }
+    return std::nullopt;
 }
 
 }  // namespace
@@ -248,16 +285,26 @@ ParsedQuantity parse_quantity(std::string_view text, Dimension dimension) {
                              "' (units: " + std::string(accepted_units(dimension)) + ")";
     const NumberAndUnit parts = split_number(trimmed(text));
     const auto number = parse_number(parts.number);
+    if (dimension == Dimension::time)
+        if (const auto clock = clock_time(trimmed(text)))
+            return refused(in_quotes(text) + " is not a time", "write '" + *clock + "'");
     if (!number) {
         const std::string_view article = what.starts_with('a') ? "an" : "a";
-        return refused(quoted(text) + " is not " + std::string(article) + " " + what, hint);
+        return refused(in_quotes(text) + " is not " + std::string(article) + " " + what, hint);
     }
-    if (parts.unit.empty()) return refused(quoted(text) + " has no unit", hint);
+    if (parts.unit.empty()) return refused(in_quotes(text) + " has no unit", hint);
     const auto unit = find_unit(parts.unit, dimension);
-    if (!unit) return refused(quoted(parts.unit) + " is not a unit of " + what, hint);
+    if (!unit) {
+        const std::string problem = in_quotes(parts.unit) + " is not a unit of " + what;
+        if (const auto meant = meant_unit(parts.unit, dimension))
+            return refused(problem, "did you mean '" + *meant + "'? (units: " +
+                                        std::string(accepted_units(dimension)) + ")");
+        if (goes_on(parts)) return refused(in_quotes(text) + " is not one number", kPlainDigits);
+        return refused(problem, hint);
+    }
     const double value = unit->to_canonical(*number);
     if (!(value >= -1.0e300 && value <= 1.0e300))
-        return refused(quoted(text) + " is too large a number", hint);
+        return refused(in_quotes(text) + " is too large a number", hint);
     return {value, {}, {}};
 }
 
@@ -266,15 +313,16 @@ ParsedQuantity parse_share(std::string_view text) {
     const auto number = parse_number(parts.number);
     if (number && parts.unit.empty()) return {*number, {}, {}};
     if (number && parts.unit == "%") return {*number / 100.0, {}, {}};
-    return refused(quoted(text) + " is not a share", "write a share such as '0.4' or '40 %'");
+    return refused(in_quotes(text) + " is not a share", "write a share such as '0.4' or '40 %'");
 }
 
 ParsedQuantity parse_bare_number(std::string_view text) {
     const NumberAndUnit parts = split_number(trimmed(text));
     const auto number = parse_number(parts.number);
-    if (!number) return refused(quoted(text) + " is not a number", "");
+    if (goes_on(parts)) return refused(in_quotes(text) + " is not one number", kPlainDigits);
+    if (!number) return refused(in_quotes(text) + " is not a number", "");
     if (!parts.unit.empty())
-        return refused(quoted(text) + " has a unit where a plain number belongs",
+        return refused(in_quotes(text) + " has a unit where a plain number belongs",
                        "write " + std::string(parts.number));
     return {*number, {}, {}};
 }

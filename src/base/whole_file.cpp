@@ -52,6 +52,7 @@ std::optional<std::string> read_whole_file(const std::string& path, std::string&
     if (::fstat(descriptor, &status) == 0 && status.st_size > 0)
         content.reserve(static_cast<std::size_t>(status.st_size) + 1);
     constexpr std::size_t kChunk = std::size_t{1} << 20U;
+    constexpr std::size_t kMostBytes = std::size_t{1} << 30U;  // an endless device must end
     std::size_t used = 0;
     while (true) {
         const std::size_t room = std::max(content.capacity() - used, std::size_t{1});
@@ -65,6 +66,11 @@ std::optional<std::string> read_whole_file(const std::string& path, std::string&
         }
         if (got == 0) break;
         used += static_cast<std::size_t>(got);
+        if (used > kMostBytes) {
+            problem = "it holds more than 1 GiB";
+            ::close(descriptor);
+            return std::nullopt;
+        }
     }
     content.resize(used);
     ::close(descriptor);
@@ -77,7 +83,12 @@ std::optional<WholeFile> WholeFile::open(const std::string& path, std::string& p
     file.target_ = path;
     std::error_code ignored;
     const std::filesystem::path resolved = std::filesystem::canonical(path, ignored);
-    if (!ignored) file.target_ = resolved.string();
+    if (!ignored) {
+        file.target_ = resolved.string();
+    } else if (const auto aim = std::filesystem::read_symlink(path, ignored); !ignored) {
+        // A link to what is not there yet: the file it names is made.
+        file.target_ = (std::filesystem::path(path).parent_path() / aim).string();
+    }
 
     struct stat status {};
     if (::stat(file.target_.c_str(), &status) == 0 && !S_ISREG(status.st_mode)) {

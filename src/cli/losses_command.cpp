@@ -96,19 +96,14 @@ Results keep_ledgers(const Scenario& scenario, Diagnostics& diagnostics) {
     return results;
 }
 
-/// Collects every warning and prints it.
+/// Prints every warning and collects it for the JSON.
 void warn(const LossesOptions& options, const Messages& messages, const Scenario& scenario,
-          const Diagnostics& diagnostics, Results& results) {
+          Diagnostics& diagnostics, Results& results) {
+    for (std::size_t i = 0; i < scenario.storms.size(); ++i)
+        warn_of_results(scenario, scenario.storms[i], results.ledgers[i], diagnostics);
     messages.show(diagnostics);
     for (const Diagnostic& diagnostic : diagnostics.list())
         results.warnings.push_back(located(diagnostic.place, diagnostic.message));
-    for (std::size_t i = 0; i < scenario.storms.size(); ++i) {
-        for (std::string& text :
-             result_warnings(scenario.storms[i], scenario.site, results.ledgers[i])) {
-            messages.warning(options.scenario, text);
-            results.warnings.push_back(std::move(text));
-        }
-    }
     if (options.every_h && !options.ledger)
         messages.note("--every shapes the ledger file alone; --ledger FILE.csv writes one");
 }
@@ -164,13 +159,16 @@ ExitStatus run_losses(const LossesOptions& options) {
 
     std::string problem;
     OutputFiles files;
-    for (const std::string& path : options.output_paths()) {
-        if (files.open(path, problem)) continue;
+    const bool opened = std::ranges::all_of(
+        options.output_paths(), [&](const std::string& path) { return files.open(path, problem); });
+    // Marched even where an output cannot be written: an input error that only the march can tell
+    // comes first.
+    Results results = keep_ledgers(*scenario, diagnostics);
+    if (diagnostics.has_errors()) return refuse(messages, diagnostics);
+    if (!opened) {
         messages.error("cannot write " + problem);
         return ExitStatus::file_trouble;
     }
-    Results results = keep_ledgers(*scenario, diagnostics);
-    if (diagnostics.has_errors()) return refuse(messages, diagnostics);
     warn(options, messages, *scenario, diagnostics, results);
     if (!write_all(options, *scenario, results, files, problem)) {
         messages.error("cannot write " + problem);

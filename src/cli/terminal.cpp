@@ -8,6 +8,7 @@
 #include <fcntl.h>
 #include <unistd.h>
 
+#include "rainledger/base/printable.hpp"
 #include "rainledger/base/whole_file.hpp"
 
 namespace rainledger {
@@ -31,9 +32,10 @@ bool wants_colour() {
 }  // namespace
 
 void keep_standard_descriptors() {
-    // open() takes the lowest free number, so each closed one is filled in turn.
+    // open() takes the lowest free number, so each closed one is filled in turn; for reading only,
+    // so that results written to a closed standard output are told as lost.
     for (int descriptor = STDIN_FILENO; descriptor <= STDERR_FILENO; ++descriptor)
-        if (::fcntl(descriptor, F_GETFD) == -1 && ::open("/dev/null", O_RDWR) == -1) return;
+        if (::fcntl(descriptor, F_GETFD) == -1 && ::open("/dev/null", O_RDONLY) == -1) return;
 }
 
 bool write_results(std::string_view text, std::string& problem) {
@@ -50,18 +52,11 @@ void Messages::print(std::string_view text) const {
 }
 
 void Messages::error(std::string_view text) const {
-    print("rainledger: " + std::string(text) + "\n");
+    print("rainledger: " + printable(text) + "\n");
 }
 
 void Messages::note(std::string_view text) const {
-    if (!quiet_) print("rainledger: note: " + std::string(text) + "\n");
-}
-
-void Messages::warning(const std::string& file, const std::string& text) const {
-    if (quiet_) return;
-    Place place;
-    place.file = file;
-    print(render({Severity::warning, Trouble::input, place, text, {}}, colour_));
+    if (!quiet_) print("rainledger: note: " + printable(text) + "\n");
 }
 
 void Messages::show(const Diagnostics& diagnostics) const {
@@ -80,7 +75,8 @@ void Messages::show(const Diagnostics& diagnostics) const {
 void print_wrong_usage(std::string_view command, std::string_view problem) {
     std::string name = "rainledger";
     if (!command.empty()) name += " " + std::string(command);
-    print_error_text(name + ": " + std::string(problem) + "\nSee '" + name + " --help'.\n");
+    print_error_text(printable(name + ": " + std::string(problem)) + "\nSee '" + name +
+                     " --help'.\n");
 }
 
 }  // namespace rainledger

@@ -25,7 +25,6 @@ public:
 
     void error(std::string_view text) const;  ///< "rainledger: TEXT"
     void note(std::string_view text) const;   ///< "rainledger: note: TEXT"
-    void warning(const std::string& file, const std::string& text) const;
 
     /// Every warning and the first fifty errors.
     void show(const Diagnostics& diagnostics) const;

@@ -17,6 +17,8 @@ namespace {
 // How far a receiver's cumulative supply may be from the true one inside a part of run-on, over its
 // own area. Accounts then stand within a few times this, also below several givers in a row.
 constexpr double kRunOnTolerance = 2.0e-7;  // mm
+// Beyond this the accounts below may stand further than 1e-6 mm from the true ones, which is told.
+constexpr double kCoarseRunOn = 5.0e-7;  // mm
 
 /// True if the surface's excess can vary while its supply does not.
 bool excess_varies(const Surface& surface) {
@@ -87,6 +89,7 @@ private:
 
     void note_coarse(double times_allowed) {
         const double difference = times_allowed * kRunOnTolerance;
+        if (difference <= kCoarseRunOn) return;
         if (!out_.coarse_run_on || out_.coarse_run_on->difference_mm < difference)
             out_.coarse_run_on = CoarseRunOn{difference};
     }

@@ -36,14 +36,16 @@ PhiMatch match_phi_index(const PhiIndex& phi, const Surface& surface, const Hyet
     if (observed > most * (1.0 + kLimitTolerance)) return UnmatchedPhi{0, observed, most};
     if (observed >= most * (1.0 - kLimitTolerance)) return ConstantRate{};
     double too_low = 0.0;  // leaves more than observed
-    double enough = peak_supply(rain, input.run_on);
+    const double peak = peak_supply(rain, input.run_on);
+    double enough = peak;
     // At most 64 halvings separate any two doubles of one order; small rates take more, up to 1100.
     while (true) {
         const double middle = too_low + 0.5 * (enough - too_low);
         if (middle <= too_low || middle >= enough) break;
         (excess_at(middle, surface, rain, input) > observed ? too_low : enough) = middle;
     }
-    return ConstantRate{enough, 0.0};
+    // A rate equal to the supply takes all of it, and so does one short of it by a rounding.
+    return ConstantRate{enough >= peak * (1.0 - 2.0 * kRateTolerance) ? peak : enough, 0.0};
 }
 
 }  // namespace rainledger

@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 #include <cstddef>
+#include <optional>
 
 #include "ledger/excess_figures.hpp"
 #include "ledger/recorders.hpp"
@@ -70,6 +71,23 @@ Accounts combined(const Membership& of, const std::vector<SurfaceLedger>& surfac
     return sum;
 }
 
+/// The earlier of two instants that may not exist.
+std::optional<double> earlier(std::optional<double> one, std::optional<double> other) {
+    if (!one || !other) return one ? one : other;
+    return std::min(*one, *other);
+}
+
+void add_starts(PlaceLedger& place, const Membership& of,
+                const std::vector<SurfaceLedger>& surfaces) {
+    for (const Member& member : of.members) {
+        const SurfaceLedger& surface = surfaces[member.surface];
+        if (!surface.ponding.empty())
+            place.ponding_start_h = earlier(place.ponding_start_h, surface.ponding.front().start_h);
+        if (member.reaches > 0.0)
+            place.runoff_start_h = earlier(place.runoff_start_h, surface.runoff_start_h);
+    }
+}
+
 PlaceLedger ledger_of(const Membership& of, const std::vector<SurfaceLedger>& surfaces,
                       const Hyetograph& rain) {
     PlaceLedger out;
@@ -79,14 +97,15 @@ PlaceLedger ledger_of(const Membership& of, const std::vector<SurfaceLedger>& su
     double ponded_before = 0.0;
     for (std::size_t step = 0; step < rain.steps(); ++step) {
         const Accounts sum = combined(of, surfaces, step);
-        out.closure_mm = std::max(out.closure_mm, std::abs(imbalance_mm(sum, ponded_before)));
+        out.closure_mm = larger_error(out.closure_mm, std::abs(imbalance_mm(sum, ponded_before)));
         ponded_before = sum.ponded_mm;
         totals.add(sum);
         out.rows.push_back({sum});
     }
     out.total = totals.total();
-    out.closure_mm = std::max(out.closure_mm, std::abs(imbalance_mm(out.total, 0.0)));
+    out.closure_mm = larger_error(out.closure_mm, std::abs(imbalance_mm(out.total, 0.0)));
     out.figures = excess_figures(out.rows, out.total, out.area_m2, rain);
+    add_starts(out, of, surfaces);
     return out;
 }
 

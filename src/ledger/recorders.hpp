@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 #include <cstddef>
+#include <limits>
 #include <optional>
 #include <utility>
 #include <vector>
@@ -62,6 +63,12 @@ inline double imbalance_mm(const Accounts& accounts, double ponded_before_mm) {
             (accounts.ponded_mm - ponded_before_mm) + accounts.excess_mm);
 }
 
+/// The larger of two errors; one that is no number counts as largest.
+inline double larger_error(double one, double other) {
+    if (std::isnan(one) || std::isnan(other)) return std::numeric_limits<double>::quiet_NaN();
+    return std::max(one, other);
+}
+
 /// Keeps the whole ledger of a surface, and its outflow where a receiver wants it.
 class LedgerRecorder {
 public:
@@ -94,7 +101,7 @@ public:
     template <class Capacity>
     void step_ends(std::size_t step, const Accounts& accounts, const Capacity& capacity) {
         ledger_.closure_mm =
-            std::max(ledger_.closure_mm, std::abs(imbalance_mm(accounts, ponded_before_mm_)));
+            larger_error(ledger_.closure_mm, std::abs(imbalance_mm(accounts, ponded_before_mm_)));
         ponded_before_mm_ = accounts.ponded_mm;
         totals_.add(accounts);
         ledger_.rows.push_back({accounts, capacity()});
@@ -108,7 +115,7 @@ public:
     [[nodiscard]] SurfaceLedger finish() {
         ledger_.total = totals_.total();
         ledger_.closure_mm =
-            std::max(ledger_.closure_mm, std::abs(imbalance_mm(ledger_.total, 0.0)));
+            larger_error(ledger_.closure_mm, std::abs(imbalance_mm(ledger_.total, 0.0)));
         return std::move(ledger_);
     }
 

@@ -29,7 +29,7 @@ double drop_of(const HortonCurve& curve) {
 }
 
 bool is_constant(const HortonCurve& curve) {
-    return curve.decay_per_h == 0.0 || drop_of(curve) == 0.0;
+    return curve.decay_per_h <= kSlowestDecay || drop_of(curve) == 0.0;
 }
 
 /// Depth between two points E0 >= E1 of the curve, E = exp(-k te).

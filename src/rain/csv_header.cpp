@@ -11,8 +11,6 @@
 namespace rainledger {
 namespace {
 
-constexpr std::array<std::string_view, 3> kTimeNames{"start", "end", "time"};
-constexpr std::array<std::string_view, 3> kRainNames{"depth", "intensity", "cumulative"};
 constexpr std::array kKinds{RainKind::depth, RainKind::intensity, RainKind::cumulative};
 
 std::string_view kind_name(RainKind kind) {
@@ -25,45 +23,15 @@ std::optional<RainKind> kind_called(std::string_view name) {
     return std::nullopt;
 }
 
-/// A header cell taken apart: "End [min]" is called "end" and has the unit "min".
-struct HeaderCell {
-    CsvColumn column;
-    std::string name;  ///< before the bracket, in lower case
-    std::optional<std::string> unit;
-};
-
-std::string lower(std::string_view text) {
-    std::string out(text);
-    for (char& c : out)
-        if (c >= 'A' && c <= 'Z') c = static_cast<char>(c - 'A' + 'a');
-    return out;
-}
-
-HeaderCell take_apart(CsvColumn column) {
-    HeaderCell cell;
-    const std::string_view title = column.title;
-    const std::size_t bracket = title.rfind('[');
-    if (bracket != std::string_view::npos && title.ends_with(']')) {
-        cell.name = lower(trimmed(title.substr(0, bracket)));
-        cell.unit = trimmed(title.substr(bracket + 1, title.size() - bracket - 2));
-    } else {
-        cell.name = lower(title);
+/// Two names of one unit ("h" and "hr", say).
+bool same_unit(const std::string& a, const std::string& b) {
+    if (a == b) return true;
+    for (const Dimension dimension : {Dimension::depth, Dimension::rate}) {
+        const auto first = find_unit(a, dimension);
+        const auto second = find_unit(b, dimension);
+        if (first && second) return first->to_canonical(1.0) == second->to_canonical(1.0);
     }
-    cell.column = std::move(column);
-    return cell;
-}
-
-/// The separator of a header row: a tab or a semicolon outside quotes is never part of a name.
-char find_separator(std::string_view line) {
-    bool quoted = false;
-    char separator = ',';
-    for (const char c : line) {
-        if (c == '"') quoted = !quoted;
-        if (quoted) continue;
-        if (c == '\t') return c;
-        if (c == ';') separator = c;
-    }
-    return separator;
+    return false;
 }
 
 class HeaderReader {
@@ -94,11 +62,13 @@ private:
     void take_named_rain();
     void take_known_rain();
     void take_rain(const HeaderCell& cell, RainKind kind);
+    [[nodiscard]] bool may_override(const HeaderCell& cell);
+    void refuse_rain_unit(const HeaderCell& cell, const std::string& unit, Dimension dimension);
 
     [[nodiscard]] Found called(std::string_view name) const;
     [[nodiscard]] const HeaderCell* titled(const std::string& title);
     [[nodiscard]] const HeaderCell* only(const Found& found);
-    [[nodiscard]] std::string titles() const;
+    [[nodiscard]] bool lacks_all(std::span<const std::string_view> names) const;
     [[nodiscard]] std::string way_out(std::span<const std::string_view> known,
                                       std::string_view example) const;
 
@@ -118,7 +88,7 @@ private:
 
 void HeaderReader::split() {
     columns_.line = line_.number;
-    columns_.separator = find_separator(line_.text);
+    columns_.separator = separator_of(line_.text);
     const char* at = line_.text.data();
     const char* const end = at + line_.text.size();
     std::string buffer;
@@ -142,13 +112,6 @@ HeaderReader::Found HeaderReader::called(std::string_view name) const {
     return found;
 }
 
-std::string HeaderReader::titles() const {
-    std::string out = "columns here: ";
-    for (const HeaderCell& cell : cells_)
-        out += (cell.column.index > 0 ? ", " : "") + shown(cell.column.title);
-    return out;
-}
-
 const HeaderCell* HeaderReader::only(const Found& found) {
     if (found.empty()) return nullptr;
     if (found.size() > 1)
@@ -169,24 +132,21 @@ const HeaderCell* HeaderReader::titled(const std::string& title) {
             known.push_back(cell.column.title);
         const auto near = nearest(title, known);
         const std::string guess = near ? "did you mean " + shown(*near) + "? " : "";
-        error(1, "there is no column " + shown(title), guess + titles());
+        error(1, "there is no column " + shown(title), guess + column_titles(cells_));
     }
     return only(found);
 }
 
-/// What to do when no column has one of the known names: the likely slip, the columns there are,
-/// and an example.
+bool HeaderReader::lacks_all(std::span<const std::string_view> names) const {
+    return std::ranges::all_of(names, [&](auto name) { return called(name).empty(); });
+}
+
 std::string HeaderReader::way_out(std::span<const std::string_view> known,
                                   std::string_view example) const {
-    std::string out;
-    for (const HeaderCell& cell : cells_) {
-        const std::string_view word = trimmed(
-            std::string_view(cell.name).substr(0, std::min(cell.name.find('('), cell.name.size())));
-        const auto near = nearest(word, known);
-        if (near && out.empty())
-            out = "is " + shown(cell.column.title) + " meant to be " + shown(*near) + "? ";
-    }
-    return out + titles() + "; " + std::string(example);
+    LackingColumns lacking;
+    lacking.time = !layout_.time_column && lacks_all(kTimeNames);
+    lacking.rain = !layout_.rain_column && lacks_all(kRainNames);
+    return column_advice(cells_, known, example, problems_.file(), lacking);
 }
 
 void HeaderReader::find_time() {
@@ -255,8 +215,8 @@ void HeaderReader::find_time_unit(const HeaderCell& cell) {
         columns_.to_h = *known;
     else
         error(cell.column.place, shown(name) + " is not a unit of time",
-              "known here: " + std::string(accepted_units(Dimension::time)) +
-                  "; timestamps take no unit");
+              unit_guess(name, Dimension::time) + "known here: " +
+                  std::string(accepted_units(Dimension::time)) + "; timestamps take no unit");
 }
 
 /// Refuses what the scenario states about times when the columns already say it themselves.
@@ -331,25 +291,47 @@ void HeaderReader::take_known_rain() {
 void HeaderReader::take_rain(const HeaderCell& cell, RainKind kind) {
     columns_.rain = cell.column;
     columns_.kind = kind;
+    if (!may_override(cell)) return;
     const auto& unit = layout_.rain_unit ? layout_.rain_unit : cell.unit;
     const bool is_rate = kind == RainKind::intensity;
     const Dimension dimension = is_rate ? Dimension::rate : Dimension::depth;
     if (!unit) {
+        const std::string name(kind_name(kind));
+        const std::string mm = is_rate ? "mm/h" : "mm";
+        const std::string in = is_rate ? "in/h" : "in";
         error(cell.column.place, "column " + shown(cell.column.title) + " has no unit",
-              is_rate ? "write it in brackets, 'intensity [mm/h]' or 'intensity [in/h]'"
-                      : "write it in brackets, '" + std::string(kind_name(kind)) + " [mm]' or '" +
-                            std::string(kind_name(kind)) + " [in]'");
+              "write it in brackets, '" + name + " [" + mm + "]' or '" + name + " [" + in +
+                  "]', or state unit: " + mm + " in the scenario");
     } else if (const auto known = find_unit(*unit, dimension)) {
+        columns_.rain_unit = *unit;
         columns_.to_mm = *known;
     } else {
-        const bool swapped =
-            find_unit(*unit, is_rate ? Dimension::depth : Dimension::rate).has_value();
-        const std::string_view other = is_rate ? "depth or cumulative" : "intensity";
-        error(cell.column.place,
-              shown(*unit) + " is not a unit of " + (is_rate ? "intensity" : "depth"),
-              swapped ? "rain in " + *unit + " is called " + std::string(other)
-                      : "known here: " + std::string(accepted_units(dimension)));
+        refuse_rain_unit(cell, *unit, dimension);
     }
+}
+
+/// A unit for a column that the scenario does not name may fill in a bracket, not replace one.
+bool HeaderReader::may_override(const HeaderCell& cell) {
+    if (!layout_.rain_unit || layout_.rain_column || !cell.unit) return true;
+    if (same_unit(*layout_.rain_unit, *cell.unit)) return true;
+    error(cell.column.place,
+          "column " + shown(cell.column.title) + " is in " + *cell.unit +
+              ", but the scenario gives unit: " + *layout_.rain_unit,
+          "leave out unit:, or name the column too, rain: '" + cell.column.title +
+              "', to replace its bracket");
+    return false;
+}
+
+void HeaderReader::refuse_rain_unit(const HeaderCell& cell, const std::string& unit,
+                                    Dimension dimension) {
+    const bool is_rate = dimension == Dimension::rate;
+    const Dimension other = is_rate ? Dimension::depth : Dimension::rate;
+    const std::string hint =
+        find_unit(unit, other)
+            ? "rain in " + unit + " is called " + (is_rate ? "depth or cumulative" : "intensity")
+            : unit_guess(unit, dimension) + "known here: " + std::string(accepted_units(dimension));
+    error(cell.column.place, shown(unit) + " is not a unit of " + (is_rate ? "intensity" : "depth"),
+          hint);
 }
 
 }  // namespace

@@ -4,19 +4,13 @@
 #include <optional>
 #include <string>
 
+#include "rain/csv_header_cells.hpp"
 #include "rain/csv_text.hpp"
 #include "rainledger/base/quantity.hpp"
 #include "rainledger/rain/hyetograph_csv.hpp"
 
 // The header row of a hyetograph CSV: which columns hold what, in which units.
 namespace rainledger {
-
-/// Where a column stands: its index among the cells, and its byte column for messages.
-struct CsvColumn {
-    std::size_t index = 0;
-    std::size_t place = 1;
-    std::string title;  ///< the whole header cell
-};
 
 struct CsvColumns {
     std::size_t line = 1;
@@ -31,6 +25,7 @@ struct CsvColumns {
 
     CsvColumn rain;
     RainKind kind = RainKind::depth;
+    std::string rain_unit;
     Unit to_mm;  ///< to mm, or to mm/h for intensities
 
     [[nodiscard]] const CsvColumn& first_time() const { return start ? *start : *end; }

@@ -6,6 +6,7 @@
 #include <system_error>
 #include <utility>
 
+#include "rain/stamp_advice.hpp"
 #include "rainledger/base/number.hpp"
 
 namespace rainledger {
@@ -115,7 +116,7 @@ void CsvRowReader::read_rain(const CsvLine& line, const CsvCell& cell, CsvRow& r
                         "write the value, or take gaps as no rain with gaps: dry in the scenario");
         return;
     }
-    if (const auto value = read_number(cell.text, line, row.rain_place))
+    if (const auto value = read_number(Role::rain, cell.text, line, row.rain_place))
         take_rain(*value, line, row);
 }
 
@@ -146,7 +147,7 @@ void CsvRowReader::read_time(Role role, const CsvLine& line, const CsvCell& cell
         row.timed = false;
     } else if (columns_.stamped) {
         if (!read_reading(role, line, cell)) row.timed = false;
-    } else if (const auto value = read_number(cell.text, line, time.place)) {
+    } else if (const auto value = read_number(role, cell.text, line, time.place)) {
         time.value = *value;
     } else {
         row.timed = false;
@@ -160,15 +161,17 @@ bool CsvRowReader::read_reading(Role role, const CsvLine& line, const CsvCell& c
         (role == Role::start ? start_reading_ : end_reading_) = *stamp.value;
         return check_offset(stamp.value->has_offset, line, place);
     }
+    const CsvColumn& column = role == Role::start ? *columns_.start : *columns_.end;
     if (first_row_ && parse_number(cell.text)) {
-        const CsvColumn& column = columns_.first_time();
         header_lacks_unit_ = true;
         problems_.error(columns_.line, column.place,
                         "column " + shown(column.title) + " has no unit, but holds numbers",
                         "write the unit of elapsed times in brackets, '" + column.title +
-                            " [min]'; only timestamps go without");
+                            " [min]', or state time_unit: min in the scenario; only timestamps go "
+                            "without");
     } else {
-        problems_.error(line.number, place, std::move(stamp.problem), std::move(stamp.hint));
+        problems_.error(line.number, place, std::move(stamp.problem),
+                        stamp_advice(cell.text, column.title).value_or(std::move(stamp.hint)));
     }
     return false;
 }
@@ -211,8 +214,8 @@ bool CsvRowReader::place_stamp(Role role, const CsvLine& line, RowTime& time) {
     return true;
 }
 
-std::optional<double> CsvRowReader::read_number(std::string_view text, const CsvLine& line,
-                                                std::size_t place) {
+std::optional<double> CsvRowReader::read_number(Role role, std::string_view text,
+                                                const CsvLine& line, std::size_t place) {
     const bool may_have_comma = columns_.separator != ',';
     const std::size_t comma = may_have_comma ? text.find(',') : std::string_view::npos;
     const bool has_point = text.find('.') != std::string_view::npos;
@@ -225,7 +228,7 @@ std::optional<double> CsvRowReader::read_number(std::string_view text, const Csv
         value = parse_number(decimal_);
     }
     if (!value) {
-        report_no_number(text, line, place);
+        report_no_number(role, text, line, place);
         return std::nullopt;
     }
     if (comma != std::string_view::npos && !note_decimal_mark(',', line, place))
@@ -245,7 +248,8 @@ bool CsvRowReader::note_decimal_mark(char mark, const CsvLine& line, std::size_t
     return false;
 }
 
-void CsvRowReader::report_no_number(std::string_view text, const CsvLine& line, std::size_t place) {
+void CsvRowReader::report_no_number(Role role, std::string_view text, const CsvLine& line,
+                                    std::size_t place) {
     double value = 0.0;
     const auto [stop, error] = std::from_chars(text.data(), text.data() + text.size(), value);
     const bool whole = stop == text.data() + text.size();
@@ -253,16 +257,19 @@ void CsvRowReader::report_no_number(std::string_view text, const CsvLine& line, 
         problems_.error(line.number, place, shown(text) + " is not a finite number");
         return;
     }
+    problems_.error(line.number, place, shown(text) + " is not a number",
+                    number_advice(role, text));
+}
+
+std::string CsvRowReader::number_advice(Role role, std::string_view text) const {
+    if (parse_stamp(text).value) return "timestamps take no unit in the header";
+    if (role != Role::rain)
+        if (auto advice = elapsed_advice(text, columns_.time_unit)) return *std::move(advice);
+    if (!looks_like_number(text)) return {};
     const bool grouped =
         text.find(',') != std::string_view::npos || text.find('.') != text.rfind('.');
-    std::string hint;
-    if (parse_stamp(text).value)
-        hint = "timestamps take no unit in the header";
-    else if (looks_like_number(text) && grouped)
-        hint = "write a plain number such as 1234.5, without marks for thousands";
-    else if (looks_like_number(text))
-        hint = "write a plain number such as 12.5; the unit stands in the header";
-    problems_.error(line.number, place, shown(text) + " is not a number", hint);
+    return grouped ? "write a plain number such as 1234.5, without marks for thousands"
+                   : "write a plain number such as 12.5; the unit stands in the header";
 }
 
 void CsvRowReader::report_cell_count(const CsvLine& line, const char* at, std::size_t seen) {
@@ -274,11 +281,15 @@ void CsvRowReader::report_cell_count(const CsvLine& line, const char* at, std::s
         static_cast<void>(cut_cell(at, end, columns_.separator, buffer_));
         ++count;
     }
-    const bool comma = columns_.separator == ',' && count > columns_.count;
+    std::string hint = "remove what is behind the last cell, or name its column in the header";
+    if (count < columns_.count)
+        hint = "write every cell, or begin the line with # if it is a note";
+    else if (columns_.separator == ',')
+        hint = "with decimal commas, separate the cells by semicolons or tabs";
     problems_.error(line.number, line.column_of(odd),
                     "this row has " + std::to_string(count) + (count == 1 ? " cell" : " cells") +
                         ", the header " + std::to_string(columns_.count),
-                    comma ? "with decimal commas, separate the cells by semicolons or tabs" : "");
+                    std::move(hint));
     first_row_ = false;
 }
 

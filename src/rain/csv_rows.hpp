@@ -64,9 +64,10 @@ private:
     bool read_reading(Role role, const CsvLine& line, const CsvCell& cell);
     bool place_stamp(Role role, const CsvLine& line, RowTime& time);
     bool check_offset(bool written, const CsvLine& line, std::size_t place);
-    std::optional<double> read_number(std::string_view text, const CsvLine& line,
+    std::optional<double> read_number(Role role, std::string_view text, const CsvLine& line,
                                       std::size_t place);
-    void report_no_number(std::string_view text, const CsvLine& line, std::size_t place);
+    void report_no_number(Role role, std::string_view text, const CsvLine& line, std::size_t place);
+    [[nodiscard]] std::string number_advice(Role role, std::string_view text) const;
     bool note_decimal_mark(char mark, const CsvLine& line, std::size_t place);
     void report_cell_count(const CsvLine& line, const char* at, std::size_t seen);
     [[nodiscard]] bool marks_missing(std::string_view text) const;

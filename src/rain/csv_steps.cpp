@@ -181,12 +181,7 @@ double CsvStepMaker::increment(const CsvRow& row) {
             row.line, row.rain_place,
             "cumulative rain falls from " + shortest(*reading_) + " to " + shortest(row.rain),
             "if the gauge started anew here, give the rain as depth per step");
-    if (first_reading_.has_rain) {
-        largest_increment_ = std::max(largest_increment_, since);
-        has_increment_ = true;
-    } else {
-        first_reading_ = row;
-    }
+    if (!first_reading_.has_rain) first_reading_ = row;
     reading_ = row.rain;
     return since;
 }
@@ -198,7 +193,7 @@ CsvSteps CsvStepMaker::finish() {
                         "the first reading is where counting begins; add the rows after it");
     if (!problems_.any_error()) {
         if (form_ != Form::covered) close_single_times();
-        warn_of_large_first_reading();
+        warn_of_first_reading();
     }
     return std::move(steps_);
 }
@@ -223,13 +218,16 @@ void CsvStepMaker::close_single_times() {
     }
 }
 
-/// Timestamps do not say what the gauge read before the first row.
-void CsvStepMaker::warn_of_large_first_reading() {
-    if (!columns_.stamped || !has_increment_ || first_reading_.rain <= largest_increment_) return;
+/// Timestamps do not say what the counter read before the first row.
+void CsvStepMaker::warn_of_first_reading() {
+    if (!columns_.stamped || !first_reading_.has_rain || !(first_reading_.rain > 0.0)) return;
+    const std::string stretch = columns_.end ? "before " + time_text(first_reading_.end)
+                                             : "after " + time_text(first_reading_.start);
     problems_.warning(first_reading_.line, first_reading_.rain_place,
-                      "the first reading, " + shortest(first_reading_.rain) +
-                          ", counts from 0 and is larger than any rise after it",
-                      "if the gauge had rain in it before, subtract that from every reading");
+                      "the first reading, " + shortest(first_reading_.rain) + " " +
+                          columns_.rain_unit + ", is taken as rain that fell " + stretch,
+                      "if the counter did not stand at 0 when the storm began, subtract what it "
+                      "showed then from every reading");
 }
 
 std::string CsvStepMaker::time_text(const RowTime& time) const {

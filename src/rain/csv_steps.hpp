@@ -70,7 +70,7 @@ private:
     void add_rain(const CsvRow& row);
     void note_length(double length);
     void close_single_times();
-    void warn_of_large_first_reading();
+    void warn_of_first_reading();
     [[nodiscard]] std::string time_text(const RowTime& time) const;
 
     const CsvColumns& columns_;
@@ -90,8 +90,6 @@ private:
 
     std::optional<double> reading_;  // cumulative: the last known one
     CsvRow first_reading_;
-    double largest_increment_ = 0.0;  // after the first reading
-    bool has_increment_ = false;
 };
 
 inline bool CsvStepMaker::follows_on(const PlainRow& row, double time) const {

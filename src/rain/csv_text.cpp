@@ -73,11 +73,15 @@ void CsvProblems::warning(std::size_t line, std::size_t column, std::string mess
 
 void CsvProblems::file_error(std::string message, std::string hint) {
     if (++errors_ <= kListedErrors)
-        diagnostics_.error(whole_file(source_), std::move(message), std::move(hint));
+        diagnostics_.error(source_.at(1, 1), std::move(message), std::move(hint));
 }
 
 void CsvProblems::file_warning(std::string message, std::string hint) {
     diagnostics_.warning(whole_file(source_), std::move(message), std::move(hint));
+}
+
+bool CsvProblems::lists_more() const {
+    return errors_ < kListedErrors;
 }
 
 void CsvProblems::close() {
@@ -91,10 +95,40 @@ bool CsvLines::next(CsvLine& line) {
     while (!rest_.empty()) {
         line.text = take_line(rest_);
         line.number = ++number_;
-        const std::size_t first = line.text.find_first_not_of(" \t");
-        if (first != std::string_view::npos && line.text[first] != '#') return true;
+        if (!says_nothing(line.text)) return true;
     }
     return false;
+}
+
+bool CsvLines::says_nothing(std::string_view line) const {
+    constexpr std::string_view kOfEmptyCells = " \t\",;";
+    const std::size_t first = line.find_first_not_of(" \t");
+    if (first == std::string_view::npos || line[first] == '#') return true;
+    const bool may_be_empty = line[first] == ',' || line[first] == ';' || line[first] == '"';
+    if (!may_be_empty || line.find_first_not_of(kOfEmptyCells, first) != std::string_view::npos)
+        return false;
+    const char separator = separator_ == '\0' ? separator_of(line) : separator_;
+    const char* at = line.data();
+    const char* const end = at + line.size();
+    std::string buffer;
+    while (true) {
+        const CsvCell cell = cut_cell(at, end, separator, buffer);
+        if (!cell.text.empty() || cell.form != CellForm::sound) return false;
+        if (at == end) return true;
+        ++at;
+    }
+}
+
+char separator_of(std::string_view line) {
+    bool quoted = false;
+    char separator = ',';
+    for (const char c : line) {
+        if (c == '"') quoted = !quoted;
+        if (quoted) continue;
+        if (c == '\t') return c;
+        if (c == ';') separator = c;
+    }
+    return separator;
 }
 
 CsvCell cut_cell(const char*& at, const char* end, char separator, std::string& buffer) {
@@ -120,6 +154,13 @@ std::string_view trimmed(std::string_view text) {
     const std::size_t first = text.find_first_not_of(" \t");
     if (first == std::string_view::npos) return {};
     return text.substr(first, text.find_last_not_of(" \t") - first + 1);
+}
+
+std::string lower(std::string_view text) {
+    std::string out(text);
+    for (char& c : out)
+        if (c >= 'A' && c <= 'Z') c = static_cast<char>(c - 'A' + 'a');
+    return out;
 }
 
 std::string shown(std::string_view text) {

@@ -17,13 +17,17 @@ public:
 
     void error(std::size_t line, std::size_t column, std::string message, std::string hint = {});
     void warning(std::size_t line, std::size_t column, std::string message, std::string hint = {});
-    /// An error or warning about the file as a whole.
+    /// An error about the file as a whole, placed at its beginning.
     void file_error(std::string message, std::string hint = {});
+    /// A warning about the file as a whole.
     void file_warning(std::string message, std::string hint = {});
     /// States how many errors were not listed.
     void close();
 
     [[nodiscard]] bool any_error() const { return errors_ > 0; }
+    /// The next error will be listed: its place is worth looking for.
+    [[nodiscard]] bool lists_more() const;
+    [[nodiscard]] const std::string& file() const { return source_.name(); }
 
 private:
     const SourceText& source_;
@@ -40,12 +44,15 @@ struct CsvLine {
     }
 };
 
-/// Walks the lines that hold something: neither blank nor a `#` comment.
+/// Walks the lines that hold something: neither blank nor a `#` comment nor nothing but empty
+/// cells.
 class CsvLines {
 public:
     explicit CsvLines(std::string_view text) : rest_(text) {}
     /// The next such line; false at the end.
     [[nodiscard]] bool next(CsvLine& line);
+    /// Sets the separator of cells. Until then each line has its own, see separator_of.
+    void use_separator(char separator) { separator_ = separator; }
 
     /// For who reads lines without next(): where the next line begins and the text ends, and
     /// passing one line whose end has been found.
@@ -57,9 +64,16 @@ public:
     }
 
 private:
+    [[nodiscard]] bool says_nothing(std::string_view line) const;
+
     std::string_view rest_;
     std::size_t number_ = 0;
+    char separator_ = '\0';
 };
+
+/// The separator that a header row shows: a tab or a semicolon outside quotes is never part of a
+/// name.
+[[nodiscard]] char separator_of(std::string_view line);
 
 /// How a cell is written.
 enum class CellForm {
@@ -81,6 +95,9 @@ struct CsvCell {
 
 /// `text` without blanks and tabs around it.
 [[nodiscard]] std::string_view trimmed(std::string_view text);
+
+/// `text` with the letters A to Z small.
+[[nodiscard]] std::string lower(std::string_view text);
 
 /// The text in quotes, cut short when it is long.
 [[nodiscard]] std::string shown(std::string_view text);

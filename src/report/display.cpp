@@ -63,7 +63,11 @@ std::string Display::flow(double l_per_s) const {
 }
 
 std::string Display::area(double m2, std::string_view unit) const {
-    return fixed(in_unit(m2, Dimension::area, unit), unit == "m2" ? 0 : 3);
+    const double value = in_unit(m2, Dimension::area, unit);
+    const double small = unit == "m2" ? 10.0 : 0.1;
+    if (value < small) return three_figures(value);
+    if (unit == "m2" || value >= 10000.0) return fixed(value, 0);
+    return fixed(value, value < 100.0 ? 3 : 1);
 }
 
 std::string_view Display::depth_unit() const {

@@ -105,6 +105,8 @@ void write_place(JsonWriter& json, const PlaceLedger& place) {
     json.begin_object();
     json.member("area_m2", place.area_m2);
     write_accounts(json, place.total);
+    json.member("ponding_start_h", place.ponding_start_h);
+    json.member("runoff_start_h", place.runoff_start_h);
     write_figures(json, place.figures);
     json.member("closure_mm", place.closure_mm);
     json.end_object();

@@ -6,46 +6,12 @@
 #include <utility>
 
 #include "rainledger/base/number.hpp"
+#include "rainledger/base/printable.hpp"
 
 namespace rainledger {
 namespace {
 
 constexpr std::string_view kReplacement = "\xEF\xBF\xBD";  // U+FFFD
-
-/// What a lead byte announces: how many bytes follow, and the range of the first of them (narrower
-/// than 80..BF where overlong forms, surrogates and values past U+10FFFF begin). Unicode Standard,
-/// table 3-7, "Well-formed UTF-8 byte sequences", from memory.
-struct Sequence {
-    std::size_t following = 0;  // 0: no lead byte of a sequence
-    unsigned lowest = 0x80U;
-    unsigned highest = 0xBFU;
-};
-
-Sequence sequence_of(unsigned lead) {
-    if (lead >= 0xC2U && lead <= 0xDFU) return {1};
-    if (lead == 0xE0U) return {2, 0xA0U, 0xBFU};
-    if (lead == 0xEDU) return {2, 0x80U, 0x9FU};
-    if (lead >= 0xE1U && lead <= 0xEFU) return {2};
-    if (lead == 0xF0U) return {3, 0x90U, 0xBFU};
-    if (lead >= 0xF1U && lead <= 0xF3U) return {3};
-    if (lead == 0xF4U) return {3, 0x80U, 0x8FU};
-    return {};
-}
-
-unsigned byte_at(std::string_view text, std::size_t i) {
-    return static_cast<unsigned char>(text[i]);
-}
-
-/// Length of the well-formed UTF-8 sequence of two to four bytes at `begin`; 0 if there is none.
-std::size_t sequence_length(std::string_view text, std::size_t begin) {
-    const Sequence sequence = sequence_of(byte_at(text, begin));
-    if (sequence.following == 0 || begin + sequence.following >= text.size()) return 0;
-    const unsigned second = byte_at(text, begin + 1);
-    if (second < sequence.lowest || second > sequence.highest) return 0;
-    for (std::size_t i = begin + 2; i <= begin + sequence.following; ++i)
-        if ((byte_at(text, i) & 0xC0U) != 0x80U) return 0;
-    return sequence.following + 1;
-}
 
 void append_escaped(std::string& out, char c) {
     constexpr std::string_view kDigits = "0123456789abcdef";
@@ -80,13 +46,11 @@ void append_escaped(std::string& out, char c) {
 void append_json_string(std::string& out, std::string_view text) {
     out += '"';
     for (std::size_t i = 0; i < text.size();) {
-        if (byte_at(text, i) < 0x80U) {
+        const std::size_t length = utf8_length(text, i);
+        if (length == 1)
             append_escaped(out, text[i]);
-            ++i;
-            continue;
-        }
-        const std::size_t length = sequence_length(text, i);
-        out += length > 0 ? text.substr(i, length) : kReplacement;
+        else
+            out += length > 0 ? text.substr(i, length) : kReplacement;
         i += length > 0 ? length : 1;
     }
     out += '"';

@@ -1,9 +1,11 @@
 #include "rainledger/report/summary.hpp"
 
 #include <cstddef>
+#include <string>
 #include <string_view>
 
 #include "rainledger/report/caution.hpp"
+#include "rainledger/report/version.hpp"
 #include "report/display.hpp"
 #include "report/summary_parts.hpp"
 
@@ -39,7 +41,7 @@ std::string summary(const Scenario& scenario, std::span<const SiteLedger> ledger
     out += "\n" + assumptions_part(scenario.site, display);
     out += "\n";
     out += kCaution;
-    out += "\n";
+    out += "\nBy rainledger " + std::string(version()) + ".\n";
     return out;
 }
 

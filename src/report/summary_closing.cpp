@@ -1,4 +1,5 @@
 #include <algorithm>
+#include <cmath>
 #include <cstddef>
 #include <variant>
 
@@ -12,7 +13,7 @@
 namespace rainledger {
 namespace {
 
-constexpr double kClosureTolerance = 1.0e-9;  // mm, times the rain where that is over 1 mm
+constexpr double kClosureTolerance = 1.0e-9;  // mm, times rain and run-on where over 1 mm
 constexpr double kMmPerMetre = 1000.0;
 constexpr std::size_t kHangingIndent = 6;
 
@@ -24,7 +25,8 @@ struct Worst {
 Worst worst_closure(const StormOnSite& on) {
     Worst worst;
     const auto look = [&](double closure_mm, const std::string& where) {
-        if (closure_mm <= worst.closure_mm) return;
+        // One that is no number is the worst there is.
+        if (std::isnan(worst.closure_mm) || closure_mm <= worst.closure_mm) return;
         worst = {closure_mm, where};
     };
     for (std::size_t i = 0; i < on.site.surfaces.size(); ++i)
@@ -37,14 +39,13 @@ Worst worst_closure(const StormOnSite& on) {
 
 std::string balance_line(const StormOnSite& on) {
     const Worst worst = worst_closure(on);
-    if (worst.closure_mm <= kClosureTolerance * std::max(1.0, total_depth_mm(on.storm.rain)))
+    double supply_mm = total_depth_mm(on.storm.rain);
+    for (const SurfaceLedger& surface : on.ledger.surfaces)
+        supply_mm = std::max(supply_mm, surface.total.rain_mm + surface.total.run_on_mm);
+    if (worst.closure_mm <= kClosureTolerance * std::max(1.0, supply_mm))
         return "  The books balance.\n";
-    constexpr double kLeastShown = 0.001;
-    const std::string by = worst.closure_mm < kLeastShown
-                               ? "less than 0.001"
-                               : "as much as " + three_figures(worst.closure_mm);
-    return fmt::format("  The books do not balance: they are off by {} mm ({}).\n", by,
-                       worst.where);
+    return fmt::format("  The books do not balance: they are off by as much as {:.2g} mm ({}).\n",
+                       worst.closure_mm, worst.where);
 }
 
 std::string left_ponded_lines(const StormOnSite& on) {

@@ -1,5 +1,6 @@
 #include <algorithm>
 #include <cstddef>
+#include <optional>
 #include <utility>
 #include <vector>
 
@@ -20,6 +21,10 @@ std::string instant(const Hyetograph& rain, double elapsed_h) {
     std::string out = elapsed_text(elapsed_h);
     if (rain.stamps) out += " (" + clock_text(rain, elapsed_h) + ")";
     return out;
+}
+
+std::string instant_or_none(const Hyetograph& rain, const std::optional<double>& elapsed_h) {
+    return elapsed_h ? instant(rain, *elapsed_h) : "none";
 }
 
 std::string interval_text(const Hyetograph& rain, const PondedInterval& interval) {
@@ -66,10 +71,17 @@ void add_surface(TextTable& table, const StormOnSite& on, std::size_t i) {
     std::vector<std::string> lines = interval_lines(rain, ledger.ponding);
     if (lines.empty()) lines.emplace_back(can_pond(on.site.surfaces[i].losses) ? "" : "-");
     table.row({printable(on.site.surfaces[i].name), ponding_time(on, i),
-               ledger.runoff_start_h ? instant(rain, *ledger.runoff_start_h) : "none",
-               lines.front()});
+               instant_or_none(rain, ledger.runoff_start_h), lines.front()});
     for (std::size_t line = 1; line < lines.size(); ++line)
         table.row({"", "", "", lines[line]});
+}
+
+void add_joint_places(TextTable& table, const StormOnSite& on) {
+    const std::vector<JointPlace> places = joint_places(on.ledger);
+    for (const JointPlace& joint : places)
+        table.row({places.size() == 1 ? "whole site" : joint.label,
+                   instant_or_none(on.storm.rain, joint.ledger->ponding_start_h),
+                   instant_or_none(on.storm.rain, joint.ledger->runoff_start_h)});
 }
 
 }  // namespace
@@ -83,6 +95,11 @@ std::string instants_part(const StormOnSite& on) {
     table.column("ponded", Align::left);
     for (std::size_t i = 0; i < on.site.surfaces.size(); ++i)
         add_surface(table, on, i);
+    const bool joins = on.site.surfaces.size() > 1;
+    if (joins) {
+        table.rule();
+        add_joint_places(table, on);
+    }
     std::string out = "When, in hours and minutes";
     if (rain.stamps)
         out += " from the start (and by the clock)";
@@ -90,7 +107,9 @@ std::string instants_part(const StormOnSite& on) {
         out += " of the record, which begins at " + elapsed_text(rain.edges_h.front());
     else
         out += " from the start";
-    return out + "\n" + table.text();
+    out += "\n" + table.text();
+    if (joins) out += "  A place ponds and runs off with the first of its surfaces.\n";
+    return out;
 }
 
 }  // namespace rainledger

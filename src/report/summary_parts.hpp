@@ -3,6 +3,7 @@
 #include <cstddef>
 #include <span>
 #include <string>
+#include <vector>
 
 #include "rainledger/ledger/ledger.hpp"
 #include "rainledger/scenario/scenario.hpp"
@@ -36,5 +37,13 @@ struct StormOnSite {
 
 /// The label of a place's row: "to CB-2".
 [[nodiscard]] std::string place_label(const PlaceLedger& place);
+
+/// A place drained to, or the whole site, with the label of its row.
+struct JointPlace {
+    std::string label;
+    const PlaceLedger* ledger;
+};
+/// The places and then the site; one place alone is the site.
+[[nodiscard]] std::vector<JointPlace> joint_places(const SiteLedger& ledger);
 
 }  // namespace rainledger

@@ -24,6 +24,9 @@ std::string rain_part(const Storm& storm, const Display& display) {
     out +=
         fmt::format("  in {} step{} ({})\n", rain.own_steps, rain.own_steps == 1 ? "" : "s",
                     storm.file.empty() ? "steps in the scenario" : "file " + printable(storm.file));
+    if (rain.taken_as_dry_h > 0.0)
+        out += fmt::format("  {} of it without data, taken as dry\n",
+                           duration_text(rain.taken_as_dry_h));
     if (rain.stamps) out += start_line(rain);
     if (storm.multiply_by != 1.0)
         out += fmt::format("  allowance: every depth multiplied by {}, already in these figures\n",
@@ -31,9 +34,6 @@ std::string rain_part(const Storm& storm, const Display& display) {
     if (storm.continued_h > 0.0)
         out +=
             fmt::format("  then {} of dry time (continue_for)\n", duration_text(storm.continued_h));
-    if (rain.taken_as_dry_h > 0.0)
-        out += fmt::format("  of which {} without data, taken as dry\n",
-                           duration_text(rain.taken_as_dry_h));
     return out;
 }
 

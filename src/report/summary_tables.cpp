@@ -34,16 +34,11 @@ std::vector<Area> surface_areas(const StormOnSite& on) {
     return areas;
 }
 
-/// The places and the site; one place alone is the site.
 std::vector<Area> joint_areas(const StormOnSite& on) {
     std::vector<Area> areas;
-    for (const PlaceLedger& place : on.ledger.places)
-        areas.push_back({place_label(place), "", place.area_m2, &place.total, &place.figures});
-    const PlaceLedger& site = on.ledger.site;
-    if (areas.size() == 1)
-        areas.front().label = "whole site, " + areas.front().label;
-    else
-        areas.push_back({"whole site", "", site.area_m2, &site.total, &site.figures});
+    for (const JointPlace& joint : joint_places(on.ledger))
+        areas.push_back(
+            {joint.label, "", joint.ledger->area_m2, &joint.ledger->total, &joint.ledger->figures});
     return areas;
 }
 
@@ -63,13 +58,26 @@ bool has_run_on(const StormOnSite& on) {
 
 bool sends_more_than_arrives(const StormOnSite& on) {
     return std::any_of(on.ledger.places.begin(), on.ledger.places.end(),
-                       [](const PlaceLedger& place) { return place.total.run_on_mm < 0.0; });
+                       [&](const PlaceLedger& place) {
+                           return on.display.depth(place.total.run_on_mm).starts_with('-');
+                       });
 }
 
 }  // namespace
 
 std::string place_label(const PlaceLedger& place) {
     return "to " + printable(place.name);
+}
+
+std::vector<JointPlace> joint_places(const SiteLedger& ledger) {
+    std::vector<JointPlace> places;
+    for (const PlaceLedger& place : ledger.places)
+        places.push_back({place_label(place), &place});
+    if (places.size() == 1)
+        places.front().label = "whole site, " + places.front().label;
+    else
+        places.push_back({"whole site", &ledger.site});
+    return places;
 }
 
 std::string accounts_part(const StormOnSite& on) {

@@ -1,6 +1,8 @@
 #include <algorithm>
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
+#include "scenario/plain_text.hpp"
 #include "scenario/yaml.hpp"
 
 namespace rainledger {
@@ -19,9 +21,15 @@ std::optional<ClosedMap> ClosedMap::read(const Reading& reading, const Entry& ow
 }
 
 void ClosedMap::refuse_key(const Entry& entry, Words keys) {
-    reading_->error(entry.key_mark, "unknown key '" + entry.key + "' in " + what_,
-                    way_out(entry.key, keys));
-    if (const auto meant = probably_meant(entry.key, keys)) misnamed_.emplace_back(*meant);
+    const auto apart = with_blank_after_colon(entry.key);
+    const auto lone = entry.value.IsNull() ? hint_for_lone_key(entry.key) : std::nullopt;
+    reading_->error(entry.key_mark, "unknown key " + in_quotes(entry.key) + " in " + what_,
+                    lone ? *lone : way_out(entry.key, keys));
+    const std::string key = entry.key.substr(0, apart ? entry.key.find(':') : std::string::npos);
+    if (std::ranges::find(keys, std::string_view(key)) != keys.end())
+        misnamed_.push_back(key);
+    else if (const auto meant = probably_meant(key, keys))
+        misnamed_.emplace_back(*meant);
 }
 
 const Entry* ClosedMap::find(std::string_view key) const {
@@ -35,7 +43,7 @@ bool ClosedMap::is_misnamed(std::string_view key) const {
 
 std::string ClosedMap::shown(std::string_view key) const {
     const Entry* entry = find(key);
-    return entry != nullptr && entry->value.IsScalar() ? entry->value.Scalar() : std::string{};
+    return entry != nullptr && entry->value.IsScalar() ? cut(entry->value.Scalar()) : std::string{};
 }
 
 const Entry* ClosedMap::require(std::string_view key, std::string_view example) const {

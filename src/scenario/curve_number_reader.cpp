@@ -2,6 +2,7 @@
 #include <string>
 
 #include "scenario/losses_reader.hpp"
+#include "scenario/shown.hpp"
 
 // The runoff curve number: its number, ratio and antecedent condition.
 namespace rainledger {
@@ -23,11 +24,18 @@ std::optional<double> read_number(const ClosedMap& map) {
                             hint);
         return std::nullopt;
     }
-    if (*number < kLowNumber)
-        map.reading().warning(entry->mark(),
-                              "a curve number of " + map.shown("number") + ", under 40",
-                              "the method answers poorly there: look for measured losses instead");
     return number;
+}
+
+/// The number that is computed with, after its antecedent condition, may be too low to trust.
+void warn_low_number(const ClosedMap& map, const CurveNumber& given) {
+    const double used = converted_number(given);
+    if (!(used < kLowNumber)) return;
+    std::string number = "a curve number of " + map.shown("number");
+    if (used != given.number)
+        number += ", " + brief(used) + " for antecedent condition " + map.shown("antecedent");
+    map.reading().warning(map.mark_of("number"), number + ", under 40",
+                          "the method answers poorly there: look for measured losses instead");
 }
 
 void check_ratios(const ClosedMap& map, double ratio, const std::optional<double>& tabulated) {
@@ -90,6 +98,7 @@ std::optional<Losses> read_curve_number(const ClosedMap& map) {
     if (!ratio_wrong) check_ratios(map, ratio, tabulated);
     if (!number) return std::nullopt;
     const CurveNumber given{*number, ratio, tabulated, antecedent};
+    warn_low_number(map, given);
     if (!retention_is_usable(map, given)) return std::nullopt;
     return given;
 }

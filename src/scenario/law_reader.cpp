@@ -61,7 +61,7 @@ void check_suction(const ClosedMap& map, const std::optional<double>& suction) {
 void check_deficit(const ClosedMap& map, const std::optional<double>& deficit) {
     map.warn_above("moisture_deficit", deficit, kHighDeficit, "0.6",
                    "a deficit is at most the porosity, about 0.5");
-    if (deficit && *deficit > kDryDeficit && *deficit <= kHighDeficit)
+    if (deficit && *deficit > kDryDeficit)
         map.reading().warning(
             map.mark_of("moisture_deficit"),
             "a dry start: a moisture deficit of " + map.shown("moisture_deficit") +

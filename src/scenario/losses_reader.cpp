@@ -2,6 +2,8 @@
 
 #include <algorithm>
 
+#include "rainledger/base/cut.hpp"
+
 namespace rainledger {
 namespace {
 
@@ -12,7 +14,7 @@ constexpr const char* kLossesExample =
 
 /// `losses` as a single word: impervious, or what was meant instead.
 void check_word_of_losses(const Reading& reading, const Entry& entry) {
-    const auto word = read_text(reading, entry, kLossesExample);
+    const auto word = read_text(reading, entry, kLossesExample, "a word or a map of one law");
     if (!word) return;
     if (*word == kImpervious) return;
     if (std::ranges::find(kLaws, std::string_view(*word)) != kLaws.end()) {
@@ -22,7 +24,7 @@ void check_word_of_losses(const Reading& reading, const Entry& entry) {
     }
     std::vector<std::string_view> words(kLaws.begin(), kLaws.end());
     words.push_back(kImpervious);
-    reading.error(entry.mark(), "losses: '" + *word + "' is not a kind of losses",
+    reading.error(entry.mark(), "losses: " + in_quotes(*word) + " is not a kind of losses",
                   way_out(*word, words));
 }
 
@@ -31,7 +33,8 @@ void refuse_unknown_law(const Reading& reading, const Entry& law, const std::str
         reading.error(law.key_mark, "'impervious' takes no parameters",
                       "write 'losses: impervious'");
     else
-        reading.error(law.key_mark, "unknown law '" + law.key + "' in the losses of " + surface,
+        reading.error(law.key_mark,
+                      "unknown law " + in_quotes(law.key) + " in the losses of " + surface,
                       way_out(law.key, kLaws));
 }
 
@@ -46,6 +49,8 @@ void read_law_of_losses(const Reading& reading, const Entry& entry, const std::s
     }
     read.law = laws.front().key_mark;
     for (const Entry& law : laws) {
+        // Of several laws an empty one is no more than one too many.
+        if (laws.size() > 1 && law.value.IsNull()) continue;
         if (std::ranges::find(kLaws, std::string_view(law.key)) != kLaws.end()) {
             const auto losses = read_law(reading, law);
             read.is_curve_number = read.is_curve_number || law.key == "curve_number";
@@ -56,8 +61,8 @@ void read_law_of_losses(const Reading& reading, const Entry& entry, const std::s
     }
     if (laws.size() > 1)
         reading.error(laws[1].key_mark,
-                      "the losses of " + surface + " name more than one law: '" + laws[0].key +
-                          "' and '" + laws[1].key + "'",
+                      "the losses of " + surface + " name more than one law: " +
+                          in_quotes(laws[0].key) + " and " + in_quotes(laws[1].key),
                       "keep one; a surface with two soils is two surfaces");
     if (const YAML::Node law = laws.front().value; law.IsMap())
         if (const YAML::Node observed = law["observed_excess"])

@@ -4,6 +4,7 @@
 #include <string>
 #include <variant>
 
+#include "rainledger/base/cut.hpp"
 #include "rainledger/base/number.hpp"
 #include "scenario/shown.hpp"
 
@@ -19,7 +20,7 @@ constexpr double kBurstShare = 0.5;
 
 /// " of storm 'x'", or nothing for the one storm of a scenario.
 std::string of_storm(const Storm& storm) {
-    return storm.name == "storm" ? "" : " of storm '" + storm.name + "'";
+    return storm.name == "storm" ? "" : " of storm " + in_quotes(storm.name);
 }
 
 void warn_high_rain(const ReadStorm& read, Diagnostics& diagnostics) {
@@ -27,14 +28,14 @@ void warn_high_rain(const ReadStorm& read, Diagnostics& diagnostics) {
     const double depth = total_depth_mm(read.storm.rain);
     if (peak > kHighIntensity)
         diagnostics.warning(read.place,
-                            "the largest intensity" + of_storm(read.storm) + " is " +
-                                three_figures(peak) + " mm/h, above 2000 mm/h",
+                            "the largest intensity" + of_storm(read.storm) + " is " + brief(peak) +
+                                " mm/h, above 2000 mm/h",
                             "check the unit of the rain and the length of its steps");
     if (depth > kHighDepthMm)
-        diagnostics.warning(read.place,
-                            "the depth" + of_storm(read.storm) + " is " + three_figures(depth) +
-                                " mm, above 2000 mm",
-                            "check the unit of the rain, and that it is not cumulative");
+        diagnostics.warning(
+            read.place,
+            "the depth" + of_storm(read.storm) + " is " + brief(depth) + " mm, above 2000 mm",
+            "check the unit of the rain, and that it is not cumulative");
 }
 
 /// Whether some surface takes losses that rain before the burst would have filled or spent.
@@ -74,7 +75,7 @@ std::string short_storms(const std::vector<ReadStorm>& storms) {
         if (hours >= kShortStormH) continue;
         const std::string text = brief_time(hours);
         if (read.storm.name == "storm") return text;
-        out += (out.empty() ? "'" : ", '") + read.storm.name + "' (" + text + ")";
+        out += (out.empty() ? "" : ", ") + in_quotes(read.storm.name) + " (" + text + ")";
     }
     return out;
 }
@@ -87,8 +88,8 @@ void warn_short_storms(const std::vector<ReadStorm>& storms,
         if (std::holds_alternative<CurveNumber>(read.surface.losses))
             diagnostics.warning(
                 read.law,
-                "surface '" + read.surface.name +
-                    "' has a curve number in a storm under 6 h: " + names,
+                "surface " + in_quotes(read.surface.name) +
+                    " has a curve number in a storm under 6 h: " + names,
                 "the method was drawn from daily totals and says little about rates "
                 "within a short storm");
 }
@@ -102,8 +103,9 @@ void warn_run_on(const std::vector<ReadSurface>& surfaces, Diagnostics& diagnost
         const double ratio = arriving_m2[i] / surfaces[i].surface.area_m2;
         if (ratio > kMostRunOnRatio * (1.0 + kRatioRoom))
             diagnostics.warning(surfaces[i].places.surface,
-                                "surface '" + surfaces[i].surface.name + "' takes run-on from " +
-                                    three_figures(ratio) + " times its own area, over 2:1",
+                                "surface " + in_quotes(surfaces[i].surface.name) +
+                                    " takes run-on from " + three_figures(ratio) +
+                                    " times its own area, over 2:1",
                                 "run-on is spread evenly here; in the field much of it would cross "
                                 "in a few paths");
     }

@@ -3,7 +3,9 @@
 #include <string>
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
 #include "rainledger/base/suggest.hpp"
+#include "scenario/plain_text.hpp"
 #include "scenario/surface_reader.hpp"
 
 // Which surface runs onto which.
@@ -11,6 +13,7 @@ namespace rainledger {
 namespace {
 
 constexpr double kShareRoom = 1.0e-12;  // shares such as 0.1 and 0.9 may sum to a bit over one
+constexpr std::size_t kMostNamed = 20;  // surfaces of a loop; the rest are counted
 constexpr const char* kRunOnExample =
     "write a surface's name, or shares such as 'runs_onto: {verge: 30 %}'";
 
@@ -26,7 +29,9 @@ std::optional<double> read_share(const Reading& reading, const Entry& entry) {
         return std::nullopt;
     }
     if (*parsed.value > 0.0 && *parsed.value <= 1.0) return parsed.value;
-    reading.error(entry.mark(), "a share of '" + *text + "' is not above 0 and up to 1", hint);
+    const bool percentage = *parsed.value >= 2.0 && *parsed.value <= 100.0 && !text->ends_with('%');
+    reading.error(entry.mark(), "a share of " + in_quotes(*text) + " is not above 0 and up to 1",
+                  percentage ? "did you mean '" + cut(*text) + " %'? " + hint : hint);
     return std::nullopt;
 }
 
@@ -36,8 +41,7 @@ std::string name_hint(const std::string& typed, const std::vector<ReadSurface>& 
     std::vector<std::string_view> names;
     for (const ReadSurface& read : surfaces)
         if (names.size() < kMostCompared) names.push_back(read.surface.name);
-    if (const auto name = nearest(typed, names))
-        return "did you mean '" + std::string(*name) + "'?";
+    if (const auto name = nearest(typed, names)) return "did you mean " + in_quotes(*name) + "?";
     return "name another surface of this scenario";
 }
 
@@ -47,10 +51,10 @@ void resolve_one(const Reading& reading, std::vector<ReadSurface>& surfaces, con
     for (const NamedShare& named : read.runs_onto) {
         const auto found = names.find(named.surface);
         if (found == names.end())
-            reading.error(named.mark, "runs_onto: there is no surface '" + named.surface + "'",
+            reading.error(named.mark, "runs_onto: there is no surface " + in_quotes(named.surface),
                           name_hint(named.surface, surfaces));
         else if (found->second == giver)
-            reading.error(named.mark, "surface '" + named.surface + "' runs onto itself",
+            reading.error(named.mark, "surface " + in_quotes(named.surface) + " runs onto itself",
                           "name another surface, or take runs_onto out");
         else
             read.surface.runs_onto.push_back({found->second, named.share});
@@ -95,9 +99,15 @@ private:
         const auto begin =
             std::ranges::find(path_, first, &std::pair<std::size_t, std::size_t>::first);
         std::string loop;
-        for (auto step = begin; step != path_.end(); ++step)
-            loop += surfaces_[step->first].surface.name + " -> ";
-        loop += surfaces_[first].surface.name;
+        const std::size_t length = static_cast<std::size_t>(path_.end() - begin);
+        for (auto step = begin; step != path_.end(); ++step) {
+            const auto at = static_cast<std::size_t>(step - begin);
+            if (length <= kMostNamed || at < kMostNamed - 1 || at == length - 1)
+                loop += cut(surfaces_[step->first].surface.name) + " -> ";
+            else if (at == kMostNamed - 1)
+                loop += "(" + std::to_string(length - kMostNamed) + " more) -> ";
+        }
+        loop += cut(surfaces_[first].surface.name);
         reading_.error(mark_of_run_on(path_.back().first, first),
                        "run-on goes round in a loop: " + loop,
                        "take one runs_onto out; water must come to a place drained to");
@@ -120,12 +130,16 @@ private:
 std::vector<NamedShare> read_runs_onto(const Reading& reading, const Entry& entry) {
     std::vector<NamedShare> shares;
     if (!entry.value.IsMap()) {
-        if (const auto name = read_text(reading, entry, kRunOnExample))
+        if (const auto name = read_text(reading, entry, kRunOnExample, "a name or a map"))
             shares.push_back({*name, entry.mark(), 1.0});
         return shares;
     }
     double sum = 0.0;
     for (const Entry& named : entries_of(reading, entry, "runs_onto")) {
+        if (const auto hint = hint_for_lone_key(named.key); hint && named.value.IsNull()) {
+            reading.error(named.key_mark, in_quotes(named.key) + " is empty", *hint);
+            continue;
+        }
         const double share = read_share(reading, named).value_or(0.0);
         shares.push_back({named.key, named.key_mark, share});
         sum += share;

@@ -5,6 +5,7 @@
 #include <tuple>
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
 #include "rainledger/base/whole_file.hpp"
 #include "scenario/plain_text.hpp"
 #include "scenario/reading_warnings.hpp"
@@ -18,6 +19,10 @@ namespace {
 
 std::string read_title(const ClosedMap& map) {
     const auto title = map.text("title", "write a title, or take the key out");
+    if (title && holds_hidden_characters(*title))
+        map.reading().error(map.mark_of("title"),
+                            "title: " + in_quotes(*title) + " holds a character that is not shown",
+                            kHiddenHint);
     return title.value_or(std::filesystem::path(map.reading().name()).filename().string());
 }
 

@@ -62,7 +62,7 @@ Json surface_schema() {
     return closed(
         {{"area", quantity(Dimension::area, "Area, above zero.")},
          {"drains_to",
-          described(text(), "Inlet or outfall that its excess goes to. Default outlet.")},
+          described(shown_text(","), "Inlet or outfall that its excess goes to. Default outlet.")},
          {"interception", quantity(Dimension::depth, "Rain held by plants, once. Default 0.")},
          {"depression_storage", quantity(Dimension::depth, "Depth held in hollows. Default 0.")},
          {"ponded_water",
@@ -135,7 +135,7 @@ Json phi_index_schema() {
 
 Json curve_number_schema() {
     return closed(
-        {{"number", described({{"type", "number"}, {"exclusiveMinimum", 0}, {"maximum", 100}},
+        {{"number", described(number({{"exclusiveMinimum", 0}, {"maximum", 100}}),
                               "Curve number for antecedent condition II.")},
          {"initial_abstraction_ratio", described(fraction(), "Ia over S. Default 0.2.")},
          {"tabulated_ratio", described(fraction(),
@@ -169,18 +169,18 @@ Json named(const std::string& what, const Json& names) {
 }  // namespace
 
 std::string scenario_schema() {
-    const Json plain_name = {{"pattern", "^[^.,\\r\\n]+$"}};
+    const Json plain_name = name(".,");
     Json surface_name = plain_name;
     surface_name["not"] = words(kReservedNames);
     Json schema = {{"$schema", "https://json-schema.org/draft/2020-12/schema"},
                    {"title", "rainledger scenario"},
                    {"description", "A site and the storms that fall on it."}};
-    schema.update(
-        closed({{"title", described(text(), "Title of the results. Default the file's name.")},
-                {"storm", described(reference("storm"), "The one storm.")},
-                {"storms", described(named("storm", plain_name), "Several storms by name.")},
-                {"surfaces", described(named("surface", surface_name), "The surfaces by name.")}},
-               {"surfaces"}, one_required({"storm", "storms"})));
+    schema.update(closed(
+        {{"title", described(shown_text(), "Title of the results. Default the file's name.")},
+         {"storm", described(reference("storm"), "The one storm.")},
+         {"storms", described(named("storm", plain_name), "Several storms by name.")},
+         {"surfaces", described(named("surface", surface_name), "The surfaces by name.")}},
+        {"surfaces"}, one_required({"storm", "storms"})));
     schema["$defs"] = definitions();
     return schema.dump(2) + "\n";
 }

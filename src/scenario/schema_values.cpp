@@ -5,6 +5,9 @@ namespace {
 
 constexpr const char* kNumber = "\\+?([0-9]+\\.?[0-9]*|\\.[0-9]+)([eE][+-]?[0-9]+)?";
 
+/// The characters that act instead of being shown, inside a bracket expression.
+constexpr const char* kHidden = "\\u0000-\\u001f\\u007f-\\u009f\\u2028-\\u202e\\u2066-\\u2069";
+
 std::string escaped(std::string_view text) {
     std::string out;
     for (const char c : text) {
@@ -76,12 +79,31 @@ Json words(Words choices) {
     return Json::object({{"enum", std::vector<std::string>(choices.begin(), choices.end())}});
 }
 
+Json number(const Json& limits) {
+    Json bare = Json::object({{"type", "number"}});
+    bare.update(limits);
+    const Json in_quotes = {{"type", "string"},
+                            {"pattern", "^[ \\t]*" + std::string(kNumber) + "[ \\t]*$"}};
+    return any_of({bare, in_quotes});
+}
+
 Json at_least_zero() {
-    return Json::object({{"type", "number"}, {"minimum", 0}});
+    return number({{"minimum", 0}});
 }
 
 Json fraction() {
-    return Json::object({{"type", "number"}, {"minimum", 0}, {"maximum", 1}});
+    return number({{"minimum", 0}, {"maximum", 1}});
+}
+
+Json shown_text(std::string_view refused) {
+    Json value = text();
+    value["pattern"] = "^[^" + std::string(refused) + kHidden + "]*$";
+    return value;
+}
+
+Json name(std::string_view refused) {
+    const std::string wrong = std::string(refused) + kHidden;
+    return Json::object({{"pattern", "^ *[^ " + wrong + "][^" + wrong + "]*$"}});
 }
 
 Json share() {

@@ -32,7 +32,13 @@ using Json = nlohmann::ordered_json;
 [[nodiscard]] Json quantity(Dimension dimension, std::string_view description);
 /// Plain text; an editor may take it for a number or a truth value.
 [[nodiscard]] Json text();
+/// Plain text without characters that are not shown, nor those of `refused`.
+[[nodiscard]] Json shown_text(std::string_view refused = {});
+/// What the names of a map look like: no blank text, and the same characters left out.
+[[nodiscard]] Json name(std::string_view refused);
 [[nodiscard]] Json words(Words choices);
+/// A number within limits ("minimum" and the like), or one in quotes.
+[[nodiscard]] Json number(const Json& limits);
 [[nodiscard]] Json at_least_zero();
 [[nodiscard]] Json fraction();
 /// A share above 0 and up to 1, or a percentage.

@@ -2,7 +2,9 @@
 #include <string>
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
 #include "rainledger/base/number.hpp"
+#include "rainledger/base/unit_spellings.hpp"
 #include "scenario/storm_reader.hpp"
 
 // Rain written out step by step in the scenario.
@@ -92,9 +94,10 @@ Edges equal_edges(const std::string& text, double every_h, std::size_t steps) {
 std::optional<double> read_end(const Reading& reading, const Entry& entry, double before) {
     const auto end = read_duration(reading, entry);
     if (!end || *end - before >= kShortestStepH) return end;
-    reading.error(entry.mark(),
-                  entry.key + ": '" + entry.value.Scalar() + "' is not after the end before it",
-                  "ends count from the storm's start and rise from one to the next");
+    reading.error(
+        entry.mark(),
+        entry.key + ": " + in_quotes(entry.value.Scalar()) + " is not after the end before it",
+        "ends count from the storm's start and rise from one to the next");
     return std::nullopt;
 }
 
@@ -155,8 +158,11 @@ std::optional<Unit> read_rain_unit(const ClosedMap& map, Dimension dimension) {
     if (other)
         hint = depths ? "for numbers in " + *name + " write 'intensities' in place of 'depths'"
                       : "for numbers in " + *name + " write 'depths' in place of 'intensities'";
+    else if (const auto meant = meant_unit(*name, dimension))
+        hint = "did you mean '" + *meant + "'? (" + hint + ")";
     map.reading().error(
-        entry->mark(), "unit: '" + *name + "' is not a unit of " + (depths ? "depth" : "intensity"),
+        entry->mark(),
+        "unit: " + in_quotes(*name) + " is not a unit of " + (depths ? "depth" : "intensity"),
         hint);
     return std::nullopt;
 }
@@ -166,6 +172,44 @@ std::optional<Edges> read_edges(const ClosedMap& map, const Entry& time, std::si
     const auto every_h = read_duration(map.reading(), time);
     if (!every_h) return std::nullopt;
     return equal_edges(time.value.Scalar(), *every_h, steps);
+}
+
+/// Where two whole numbers meet at a comma without a blank: the text of both, such as "1,2".
+std::string_view pair_at_comma(std::string_view list, std::size_t comma) {
+    constexpr std::string_view kDigits = "0123456789";
+    constexpr std::string_view kBounds = "[, \t\r\n";
+    const std::size_t before = list.find_last_not_of(kDigits, comma - 1);
+    const std::size_t after = std::min(list.find_first_not_of(kDigits, comma + 1), list.size());
+    const bool digits = before != comma - 1 && after != comma + 1;
+    if (!digits || kBounds.find(list[before]) == std::string_view::npos) return {};
+    if (after < list.size() && kBounds.find(list[after]) == std::string_view::npos) return {};
+    return list.substr(before + 1, after - before - 1);
+}
+
+/// Whether the comma parts entries as people write them: a blank and more on the same line.
+bool parts_with_blank(std::string_view list, std::size_t comma) {
+    const std::size_t next = list.find_first_not_of(" \t", comma + 1);
+    return next > comma + 1 && next < list.size() && list[next] != '\n' && list[next] != '\r' &&
+           list[next] != '#';
+}
+
+/// Commas of both kinds in one list: those without a blank were likely meant for decimals.
+void warn_decimal_commas(const Reading& reading, const Entry& rain) {
+    std::string_view list = reading.from(rain.value.Mark());
+    if (!rain.value.IsSequence() || !list.starts_with('[')) return;
+    list = list.substr(0, list.find(']'));
+    std::string_view pair;
+    bool blanks = false;
+    for (std::size_t comma = list.find(','); comma != std::string_view::npos;
+         comma = list.find(',', comma + 1)) {
+        if (pair.empty()) pair = pair_at_comma(list, comma);
+        blanks = blanks || parts_with_blank(list, comma);
+    }
+    if (pair.empty() || !blanks) return;
+    std::string decimal(pair);
+    decimal[decimal.find(',')] = '.';
+    reading.warning(rain.mark(), "commas separate entries: " + cut(pair) + " are two entries",
+                    "write " + cut(decimal) + " for a decimal");
 }
 
 /// The numbers of a list of depths or intensities, in mm or mm/h.
@@ -185,6 +229,7 @@ std::optional<std::vector<double>> read_rain_numbers(const ClosedMap& map, const
         return number;
     });
     if (!unit) numbers.reset();
+    warn_decimal_commas(map.reading(), rain);
     return numbers;
 }
 

@@ -2,6 +2,9 @@
 
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
+#include "scenario/plain_text.hpp"
+
 namespace rainledger {
 namespace {
 
@@ -57,7 +60,8 @@ std::optional<Hyetograph> read_rain(const ClosedMap& map, Storm& storm) {
 ReadStorm read_storm(const Reading& reading, const Entry& entry, std::string name) {
     ReadStorm read;
     read.place = reading.at(entry.key_mark);
-    const std::string what = name == "storm" ? "the storm" : "storm '" + name + "'";
+    read.storm.place = read.place;
+    const std::string what = name == "storm" ? "the storm" : "storm " + in_quotes(name);
     read.storm.name = std::move(name);
     const auto map = ClosedMap::read(reading, entry, what, kStormKeys, kStormExample);
     if (!map) return read;
@@ -71,12 +75,17 @@ ReadStorm read_storm(const Reading& reading, const Entry& entry, std::string nam
 }
 
 void check_storm_name(const Reading& reading, const Entry& entry) {
-    if (!entry.key.empty() && entry.key.find_first_of(".,\n\r") == std::string::npos) return;
-    reading.error(entry.key_mark,
-                  entry.key.empty()
-                      ? "a storm's name is empty"
-                      : "storm name '" + entry.key + "' holds a dot, comma or newline",
-                  "names stand in tables and paths: use words, '-' and '_'");
+    const std::string hint = "names stand in tables and paths: use words, '-' and '_'";
+    if (is_blank(entry.key))
+        reading.error(entry.key_mark, "a storm's name is empty", hint);
+    else if (entry.key.find_first_of(".,\n\r") != std::string::npos)
+        reading.error(entry.key_mark,
+                      "storm name " + in_quotes(entry.key) + " holds a dot, comma or newline",
+                      hint);
+    else if (holds_hidden_characters(entry.key))
+        reading.error(entry.key_mark,
+                      "storm name " + in_quotes(entry.key) + " holds a character that is not shown",
+                      kHiddenHint);
 }
 
 std::vector<ReadStorm> read_named_storms(const Reading& reading, const Entry& entry) {

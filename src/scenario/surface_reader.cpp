@@ -3,7 +3,9 @@
 #include <algorithm>
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
 #include "scenario/losses_reader.hpp"
+#include "scenario/plain_text.hpp"
 
 namespace rainledger {
 namespace {
@@ -19,11 +21,16 @@ constexpr const char* kSurfacesExample =
 
 void check_surface_name(const Reading& reading, const Entry& entry) {
     const std::string& name = entry.key;
-    if (name.empty())
+    if (is_blank(name))
         reading.error(entry.key_mark, "a surface's name is empty", "give it a name");
     else if (name.find_first_of(".,\n\r") != std::string::npos)
-        reading.error(entry.key_mark, "surface name '" + name + "' holds a dot, comma or newline",
+        reading.error(entry.key_mark,
+                      "surface name " + in_quotes(name) + " holds a dot, comma or newline",
                       "names stand in tables and paths: use words, '-' and '_'");
+    else if (holds_hidden_characters(name))
+        reading.error(entry.key_mark,
+                      "surface name " + in_quotes(name) + " holds a character that is not shown",
+                      kHiddenHint);
     else if (std::ranges::find(kReservedNames, std::string_view(name)) != kReservedNames.end())
         reading.error(entry.key_mark, "a surface cannot be called '" + name + "'",
                       "site, storm, storms and table have meanings of their own");
@@ -45,11 +52,16 @@ std::string read_drains_to(const ClosedMap& map) {
     if (entry == nullptr) return "outlet";
     const auto place = read_text(map.reading(), *entry, hint);
     if (!place) return {};
-    if (place->empty())
+    if (is_blank(*place))
         map.reading().error(entry->mark(), "'drains_to' is empty", hint);
     else if (place->find_first_of(",\n\r") != std::string::npos)
-        map.reading().error(entry->mark(), "drains_to: '" + *place + "' holds a comma or newline",
-                            hint);
+        map.reading().error(entry->mark(),
+                            "drains_to: " + in_quotes(*place) + " holds a comma or newline", hint);
+    else if (holds_hidden_characters(*place))
+        map.reading().error(
+            entry->mark(),
+            "drains_to: " + in_quotes(*place) + " holds a character that is not shown",
+            kHiddenHint);
     return *place;
 }
 
@@ -89,7 +101,7 @@ ReadSurface read_surface(const Reading& reading, const Entry& entry) {
     read.surface.name = entry.key;
     read.places.surface = reading.at(entry.key_mark);
     check_surface_name(reading, entry);
-    const std::string what = "surface '" + entry.key + "'";
+    const std::string what = "surface " + in_quotes(entry.key);
     const auto map =
         ClosedMap::read(reading, entry, what, kSurfaceKeys,
                         "write its area and losses below its name, such as '{area: 0.48 "
@@ -126,10 +138,11 @@ void warn_drains_to_surface(const Reading& reading, const std::vector<ReadSurfac
         if (std::ranges::binary_search(names, std::string_view(read.surface.drains_to)))
             reading.diagnostics().warning(
                 read.places.surface,
-                "surface '" + read.surface.name + "' drains to a place called like the surface '" +
-                    read.surface.drains_to + "'",
-                "to send its excess onto that surface write 'runs_onto: " + read.surface.drains_to +
-                    "'");
+                "surface " + in_quotes(read.surface.name) +
+                    " drains to a place called like the surface " +
+                    in_quotes(read.surface.drains_to),
+                "to send its excess onto that surface write 'runs_onto: " +
+                    cut(read.surface.drains_to) + "'");
 }
 
 }  // namespace

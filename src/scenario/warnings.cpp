@@ -31,49 +31,54 @@ double step_length_at(const Hyetograph& rain, double instant_h) {
     return rain.duration_h[static_cast<std::size_t>(edge - rain.edges_h.begin()) - 1];
 }
 
-void warn_small_excess(const std::string& name, const Surface& surface, const SurfaceLedger& ledger,
-                       std::vector<std::string>& warnings) {
+/// What there is to say of a curve number's excess; empty: nothing.
+std::string small_excess(const Surface& surface, const SurfaceLedger& ledger) {
     const double excess = ledger.total.excess_mm;
-    if (!std::holds_alternative<CurveNumber>(surface.losses)) return;
-    if (excess > 0.0 && excess < kSmallExcessMm)
-        warnings.push_back(name +
-                           ": a curve number answers poorly under 12.7 mm of excess, and this is " +
-                           fixed(excess, 1) + " mm");
+    if (!std::holds_alternative<CurveNumber>(surface.losses)) return {};
+    if (ledger.total.rain_mm == 0.0 || excess >= kSmallExcessMm) return {};
+    return "a curve number answers poorly under 12.7 mm of excess, and this is " +
+           fixed(excess, 1) + " mm";
 }
 
-void warn_long_step(const std::string& name, const Storm& storm, const Surface& surface,
-                    const SurfaceLedger& ledger, std::vector<std::string>& warnings) {
+/// A duration to the minute, as people read times.
+std::string minutes(double hours) {
+    return hours * 60.0 < 0.5 ? "half a minute" : fixed(hours * 60.0, 0) + " min";
+}
+
+/// What there is to say of the step in which a surface first ponds; empty: nothing.
+std::string long_step(const Storm& storm, const Surface& surface, const SurfaceLedger& ledger) {
     const auto rain_h = first_rain_h(storm.rain);
-    if (!rain_h || ledger.ponding.empty()) return;
-    if (std::holds_alternative<Impervious>(surface.losses)) return;
+    if (!rain_h || ledger.ponding.empty()) return {};
+    if (std::holds_alternative<Impervious>(surface.losses)) return {};
     const double until_ponding_h = ledger.ponding.front().start_h - *rain_h;
     const double step_h = step_length_at(storm.rain, ledger.ponding.front().start_h);
-    if (!(until_ponding_h > 0.0) || !(step_h > kLongStepShare * until_ponding_h)) return;
-    warnings.push_back(name + ": the rain's step of " + brief_time(step_h) +
-                       " is long against the " + three_figures(until_ponding_h * 60.0) +
-                       " min from first rain to ponding; finer rain would pond at another time");
+    if (!(until_ponding_h > 0.0) || !(step_h > kLongStepShare * until_ponding_h)) return {};
+    return "the rain's step of " + minutes(step_h) + " is long against the " +
+           minutes(until_ponding_h) +
+           " from first rain to ponding; finer rain would pond at another time";
 }
 
 }  // namespace
 
-std::vector<std::string> result_warnings(const Storm& storm, const Site& site,
-                                         const SiteLedger& ledger) {
-    std::vector<std::string> warnings;
+void warn_of_results(const Scenario& scenario, const Storm& storm, const SiteLedger& ledger,
+                     Diagnostics& diagnostics) {
     if (storm.rain.taken_as_dry_h > 0.0)
-        warnings.push_back(storm.name + ": " + brief_time(storm.rain.taken_as_dry_h) +
-                           " of the record had no values and were taken as dry");
-    for (std::size_t i = 0; i < site.surfaces.size(); ++i) {
-        const Surface& surface = site.surfaces[i];
-        const std::string name = name_of(surface.name, storm);
-        warn_small_excess(name, surface, ledger.surfaces[i], warnings);
-        warn_long_step(name, storm, surface, ledger.surfaces[i], warnings);
+        diagnostics.warning(storm.place, storm.name + ": " + minutes(storm.rain.taken_as_dry_h) +
+                                             " of the record had no values and were taken as dry");
+    for (std::size_t i = 0; i < scenario.site.surfaces.size(); ++i) {
+        const Surface& surface = scenario.site.surfaces[i];
+        for (const std::string& text : {small_excess(surface, ledger.surfaces[i]),
+                                        long_step(storm, surface, ledger.surfaces[i])})
+            if (!text.empty())
+                diagnostics.warning(scenario.places[i].surface,
+                                    name_of(surface.name, storm) + ": " + text);
     }
     if (ledger.coarse_run_on)
-        warnings.push_back(name_of("site", storm) +
-                           ": run-on below a surface that infiltrates is handed over in parts of a "
-                           "step that leave the accounts below it uncertain by " +
-                           shortest(ledger.coarse_run_on->difference_mm) + " mm");
-    return warnings;
+        diagnostics.warning(storm.place,
+                            name_of("site", storm) +
+                                ": run-on below a surface that infiltrates is handed over in parts "
+                                "of a step that leave the accounts below it uncertain by " +
+                                three_figures(ledger.coarse_run_on->difference_mm) + " mm");
 }
 
 void report_unmatched(const Scenario& scenario, const Storm& storm, const SiteLedger& ledger,

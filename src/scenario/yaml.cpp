@@ -4,19 +4,19 @@
 #include <map>
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
+#include "rainledger/base/number.hpp"
+#include "scenario/plain_text.hpp"
+
 namespace rainledger {
 namespace {
 
 constexpr std::size_t kLongestShownLine = 4096;
 
-std::string quoted(std::string_view text) {
-    return "'" + std::string(text) + "'";
-}
-
 std::string kind_of(const YAML::Node& node) {
     if (node.IsMap()) return "a map";
     if (node.IsSequence()) return "a list";
-    if (node.IsScalar()) return quoted(node.Scalar());
+    if (node.IsScalar()) return in_quotes(node.Scalar());
     return "nothing";
 }
 
@@ -24,18 +24,44 @@ bool is_empty(const YAML::Node& node) {
     return !node.IsDefined() || node.IsNull();
 }
 
+/// A hint for what the blank after a colon would mend, else the usual one.
+std::string hint_of_blank(const std::string& text, const std::string& hint) {
+    const auto apart = with_blank_after_colon(text);
+    return apart ? blank_hint(*apart) : hint;
+}
+
+/// The number's own hint where a comma stands in it, else the usual one.
+std::string hint_of_comma(const std::string& text, const std::string& of_number,
+                          const std::string& hint) {
+    return text.find(',') != std::string::npos && !of_number.empty() ? of_number : hint;
+}
+
 /// Reports a value of the wrong kind.
 void wrong_kind(const Reading& reading, const Entry& entry, const std::string& belongs,
                 const std::string& hint) {
     if (is_empty(entry.value))
-        reading.error(entry.mark(), quoted(entry.key) + " is empty; " + belongs + " belongs here",
-                      hint);
+        reading.error(entry.mark(),
+                      in_quotes(entry.key) + " is empty; " + belongs + " belongs here",
+                      hint_of_blank(entry.key, hint));
     else
-        reading.error(entry.mark(), belongs + " belongs here, not " + kind_of(entry.value), hint);
+        reading.error(entry.mark(), belongs + " belongs here, not " + kind_of(entry.value),
+                      entry.value.IsScalar() ? hint_of_blank(entry.value.Scalar(), hint) : hint);
 }
 
 std::string example_of(Dimension dimension) {
     return std::string(example_quantity(dimension));
+}
+
+/// The fraction probably meant by a percentage with its sign or without: "0.20" for "20".
+std::optional<std::string> meant_fraction(const std::string& text) {
+    const auto share = parse_share(text).value;
+    if (!share) return std::nullopt;
+    const bool has_sign = text.find('%') != std::string::npos;
+    if (!has_sign && *share < 2.0) return std::nullopt;  // 1.2 is no likely percentage
+    const double fraction = has_sign ? *share : *share / 100.0;
+    if (!(fraction >= 0.0 && fraction <= 1.0)) return std::nullopt;
+    std::string decimals = fixed(fraction, 2);
+    return parse_number(decimals) == fraction ? decimals : shortest(fraction);
 }
 
 }  // namespace
@@ -66,6 +92,23 @@ Place Reading::at_byte(std::size_t byte) const {
     const auto next = std::ranges::upper_bound(line_starts_, byte);
     const auto line = static_cast<std::size_t>(next - line_starts_.begin());
     return at_line(line, byte - line_starts_[line - 1] + 1);
+}
+
+std::string_view Reading::line(std::size_t index) const {
+    if (index >= line_starts_.size()) return {};
+    const std::size_t begin = line_starts_[index];
+    const std::size_t end =
+        index + 1 < line_starts_.size() ? line_starts_[index + 1] - 1 : text_.size();
+    std::string_view line = std::string_view(text_).substr(begin, end - begin);
+    if (line.ends_with('\r')) line.remove_suffix(1);
+    return line;
+}
+
+std::string_view Reading::from(const YAML::Mark& mark) const {
+    if (mark.is_null() || static_cast<std::size_t>(mark.line) >= line_starts_.size()) return {};
+    const std::size_t byte =
+        line_starts_[static_cast<std::size_t>(mark.line)] + static_cast<std::size_t>(mark.column);
+    return std::string_view(text_).substr(std::min(byte, text_.size()));
 }
 
 void Reading::error(const YAML::Mark& mark, std::string message, std::string hint) const {
@@ -99,7 +142,7 @@ std::vector<Entry> entries_of(const Reading& reading, const Entry& map, const st
             entries.push_back({key, mark, pair.second});
         else
             reading.error(
-                mark, quoted(key) + " is given twice in " + what,
+                mark, in_quotes(key) + " is given twice in " + what,
                 "keep one of them; the other is on line " + std::to_string(earlier->second));
     }
     return entries;
@@ -120,14 +163,15 @@ bool is_list(const Reading& reading, const Entry& entry, const std::string& what
 }
 
 std::optional<std::string> read_text(const Reading& reading, const Entry& entry,
-                                     const std::string& hint) {
+                                     const std::string& hint, const std::string& takes) {
     if (is_empty(entry.value)) {
-        reading.error(entry.mark(), quoted(entry.key) + " is empty", hint);
+        reading.error(entry.mark(), in_quotes(entry.key) + " is empty",
+                      hint_of_blank(entry.key, hint));
         return std::nullopt;
     }
     if (!entry.value.IsScalar()) {
         reading.error(entry.mark(),
-                      quoted(entry.key) + " takes a single value, not " + kind_of(entry.value),
+                      in_quotes(entry.key) + " takes " + takes + ", not " + kind_of(entry.value),
                       hint);
         return std::nullopt;
     }
@@ -148,12 +192,12 @@ std::optional<double> read_quantity(const Reading& reading, const Entry& entry, 
     if (!parsed.value) return refuse(parsed.problem, parsed.hint);
     const double value = *parsed.value;
     if (least == Least::zero && !(value >= 0.0))
-        return refuse(quoted(*text) + " is below zero", "write zero or more");
+        return refuse(in_quotes(*text) + " is below zero", "write zero or more");
     if (least == Least::above_zero && !(value > 0.0))
-        return refuse(quoted(*text) + " is not above zero",
+        return refuse(in_quotes(*text) + " is not above zero",
                       "write more than zero, such as '" + example_of(dimension) + "'");
     if (!(value <= kLargestValue))
-        return refuse(quoted(*text) + " is too large to compute with",
+        return refuse(in_quotes(*text) + " is too large to compute with",
                       "check the number and its unit");
     return value;
 }
@@ -167,10 +211,14 @@ std::optional<double> read_bare(const Reading& reading, const Entry& entry,
         reading.error(entry.mark(), entry.key + ": " + problem, hint);
         return std::nullopt;
     };
-    if (!parsed.value) return refuse(parsed.problem);
-    if (!(*parsed.value >= 0.0)) return refuse(quoted(*text) + " is below zero");
+    if (!parsed.value) {
+        reading.error(entry.mark(), entry.key + ": " + parsed.problem,
+                      hint_of_comma(*text, parsed.hint, hint));
+        return std::nullopt;
+    }
+    if (!(*parsed.value >= 0.0)) return refuse(in_quotes(*text) + " is below zero");
     if (!(*parsed.value <= kLargestValue))
-        return refuse(quoted(*text) + " is too large to compute with");
+        return refuse(in_quotes(*text) + " is too large to compute with");
     return parsed.value;
 }
 
@@ -180,21 +228,23 @@ std::optional<double> read_fraction(const Reading& reading, const Entry& entry) 
     if (!text) return std::nullopt;
     const ParsedQuantity parsed = parse_bare_number(*text);
     const std::string problem =
-        parsed.value ? quoted(*text) + " is not between 0 and 1" : parsed.problem;
+        parsed.value ? in_quotes(*text) + " is not between 0 and 1" : parsed.problem;
     if (parsed.value && *parsed.value >= 0.0 && *parsed.value <= 1.0) return parsed.value;
-    reading.error(entry.mark(), entry.key + ": " + problem, hint);
+    const auto meant = meant_fraction(*text);
+    reading.error(entry.mark(), entry.key + ": " + problem,
+                  meant ? "write " + *meant : hint_of_comma(*text, parsed.hint, hint));
     return std::nullopt;
 }
 
 std::optional<std::size_t> read_word(const Reading& reading, const Entry& entry, Words words) {
     std::string choices;
     for (const std::string_view word : words)
-        choices += (choices.empty() ? "write " : " or ") + quoted(word);
+        choices += (choices.empty() ? "write " : " or ") + in_quotes(word);
     const auto text = read_text(reading, entry, choices);
     if (!text) return std::nullopt;
     const auto found = std::ranges::find(words, std::string_view(*text));
     if (found != words.end()) return static_cast<std::size_t>(found - words.begin());
-    reading.error(entry.mark(), entry.key + ": " + quoted(*text) + " is not a choice here",
+    reading.error(entry.mark(), entry.key + ": " + in_quotes(*text) + " is not a choice here",
                   words.size() > 1 ? way_out(*text, words) : choices);
     return std::nullopt;
 }

@@ -31,6 +31,10 @@ public:
     [[nodiscard]] Place at(const YAML::Mark& mark) const;
     /// The place of a byte of the text.
     [[nodiscard]] Place at_byte(std::size_t byte) const;
+    /// The text from a mark to the end; nothing for a mark of nothing.
+    [[nodiscard]] std::string_view from(const YAML::Mark& mark) const;
+    /// A line of the text without its end, counted from 0; nothing beyond the last.
+    [[nodiscard]] std::string_view line(std::size_t index) const;
 
     void error(const YAML::Mark& mark, std::string message, std::string hint = {}) const;
     void warning(const YAML::Mark& mark, std::string message, std::string hint = {}) const;
@@ -66,9 +70,11 @@ struct Entry {
 [[nodiscard]] bool is_list(const Reading& reading, const Entry& entry, const std::string& what,
                            const std::string& hint);
 
-/// The text of a single value; `hint` says what to write where there is none.
+/// The text of a single value; `hint` says what to write where there is none, `takes` what else
+/// could stand there.
 [[nodiscard]] std::optional<std::string> read_text(const Reading& reading, const Entry& entry,
-                                                   const std::string& hint);
+                                                   const std::string& hint,
+                                                   const std::string& takes = "a single value");
 
 /// The least value that a number may take.
 enum class Least { zero, above_zero };
@@ -101,7 +107,7 @@ public:
     /// Whether an unknown key, already reported, was probably meant to be `key`.
     [[nodiscard]] bool is_misnamed(std::string_view key) const;
     [[nodiscard]] YAML::Mark mark_of(std::string_view key) const { return find(key)->mark(); }
-    /// The text of a key that holds a single value.
+    /// The text of a key that holds a single value, cut short for a message.
     [[nodiscard]] std::string shown(std::string_view key) const;
 
     /// The entry of a key that must be there; its absence is reported at the map's owner, unless

@@ -24,7 +24,14 @@ TEST_CASE("numbers are written shortest for programs and fixed for people") {
     CHECK(three_figures(34.24) == "34.2");
     CHECK(three_figures(9.999) == "10.0");
     CHECK(three_figures(0.3421) == "0.342");
-    CHECK(three_figures(12345.0) == "12345");
+    CHECK(three_figures(0.9996) == "1.00");
+    CHECK(three_figures(999.6) == "1000");
+    CHECK(three_figures(12345.0) == "12300");
+    CHECK(three_figures(1184000.0) == "1180000");
+    CHECK(three_figures(0.02534) == "0.0253");
+    CHECK(three_figures(0.0000012) == "0.000001");
+    CHECK(three_figures(0.0) == "0");
+    CHECK(three_figures(-4.217) == "-4.22");
 }
 
 }  // namespace rainledger

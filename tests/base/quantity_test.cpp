@@ -62,10 +62,96 @@ TEST_CASE("a quantity without its unit, or with another's, is refused with what 
     CHECK(bare.hint == "write a number with a unit, such as '12.5 mm' (units: mm, cm, m, in, ft)");
     CHECK(parse_quantity("12.5 mm/h", Dimension::depth).problem == "'mm/h' is not a unit of depth");
     CHECK(parse_quantity("lots", Dimension::rate).problem == "'lots' is not a rate");
-    CHECK(parse_quantity("1,5 mm", Dimension::depth).problem == "',5 mm' is not a unit of depth");
     CHECK(parse_quantity("1e400 mm", Dimension::depth).problem == "'1e400 mm' is not a depth");
     CHECK(parse_quantity("1e307 m", Dimension::depth).problem == "'1e307 m' is too large a number");
     CHECK(parse_quantity("nan mm", Dimension::depth).problem == "'nan mm' is not a depth");
+}
+
+TEST_CASE("other spellings of a unit are not taken, but name the one that was meant") {
+    const auto hint = [](const std::string& unit, Dimension dimension) {
+        const ParsedQuantity parsed = parse_quantity("3 " + unit, dimension);
+        CHECK_FALSE(parsed.value);
+        CHECK(parsed.problem ==
+              "'" + unit + "' is not a unit of " + std::string(dimension_name(dimension)));
+        const std::string end = " (units: " + std::string(accepted_units(dimension)) + ")";
+        INFO(unit << ": " << parsed.hint);
+        REQUIRE(parsed.hint.ends_with(end));
+        return parsed.hint.substr(0, parsed.hint.size() - end.size());
+    };
+    CHECK(parse_quantity("3 sqm", Dimension::area).hint ==
+          "did you mean 'm2'? (units: m2, ha, km2, ft2, ac, mi2)");
+    for (const char* unit : {"m\xC2\xB2", "m^2", "sqm", "sq m", "square metres", "M2"})
+        CHECK(hint(unit, Dimension::area) == "did you mean 'm2'?");
+    for (const char* unit : {"acres", "acre", "Ac."})
+        CHECK(hint(unit, Dimension::area) == "did you mean 'ac'?");
+    CHECK(hint("hectares", Dimension::area) == "did you mean 'ha'?");
+    CHECK(hint("sq ft", Dimension::area) == "did you mean 'ft2'?");
+    for (const char* unit : {"inches", "inch", "in.", "\""})
+        CHECK(hint(unit, Dimension::depth) == "did you mean 'in'?");
+    CHECK(hint("feet", Dimension::depth) == "did you mean 'ft'?");
+    CHECK(hint("MM", Dimension::depth) == "did you mean 'mm'?");
+    for (const char* unit : {"minutes", "mins", "min."})
+        CHECK(hint(unit, Dimension::time) == "did you mean 'min'?");
+    for (const char* unit : {"hours", "hrs", "hour"})
+        CHECK(hint(unit, Dimension::time) == "did you mean 'h'?");
+    for (const char* unit : {"mm/hour", "mm / hours", "mm per hour", "mm h-1", "mm h^-1",
+                             "mm h\xE2\x81\xBB\xC2\xB9", "mm/hrs", "mmph"})
+        CHECK(hint(unit, Dimension::rate) == "did you mean 'mm/h'?");
+    CHECK(hint("mm/hr.", Dimension::rate) == "did you mean 'mm/hr'?");
+    CHECK(hint("in/hour", Dimension::rate) == "did you mean 'in/h'?");
+    CHECK(hint("\xC2\xB5m/s", Dimension::rate) == "did you mean 'um/s'?");
+    for (const char* unit : {"/h", "h-1", "h^-1", "per hour"})
+        CHECK(hint(unit, Dimension::decay) == "did you mean '1/h'?");
+    CHECK(hint("1/minute", Dimension::decay) == "did you mean '1/min'?");
+    for (const char* unit : {"mm/sqrt(h)", "mm/\xE2\x88\x9Ah", "mm/h^(1/2)", "mm/hr^0.5"})
+        CHECK(hint(unit, Dimension::sorptivity) == "did you mean 'mm/h^0.5'?");
+    CHECK(hint("l/s", Dimension::discharge) == "did you mean 'L/s'?");
+    CHECK(hint("lps", Dimension::discharge) == "did you mean 'L/s'?");
+    CHECK(hint("m3/sec", Dimension::discharge) == "did you mean 'm3/s'?");
+    CHECK(hint("ft^3/s", Dimension::discharge) == "did you mean 'ft3/s'?");
+    CHECK(hint("CFS", Dimension::discharge) == "did you mean 'cfs'?");
+    CHECK(hint("acre-feet", Dimension::volume) == "did you mean 'ac-ft'?");
+    CHECK(hint("cubic meters", Dimension::volume) == "did you mean 'm3'?");
+    CHECK(hint("kpa", Dimension::suction) == "did you mean 'kPa'?");
+    CHECK(hint("years", Dimension::frequency) == "did you mean 'yr'?");
+    CHECK(parse_quantity("3 mm", Dimension::area).hint ==
+          "write a number with a unit, such as '0.42 ha' (units: m2, ha, km2, ft2, ac, mi2)");
+}
+
+TEST_CASE("decimal commas and marks for thousands are named as such") {
+    const std::string hint = "write a decimal point, and no mark for thousands";
+    for (const std::string text : {"4,800 m2", "0,48 m2", "4 800 m2", "4'800 m2"}) {
+        const ParsedQuantity parsed = parse_quantity(text, Dimension::area);
+        CHECK(parsed.problem == "'" + text + "' is not one number");
+        CHECK(parsed.hint == hint);
+    }
+    CHECK(parse_bare_number("0,2").problem == "'0,2' is not one number");
+    CHECK(parse_bare_number("0,2").hint == hint);
+}
+
+TEST_CASE("a time on a clock is given with its unit") {
+    for (const char* text : {"0:10", "00:10", "00:10:00", " 0:10 "}) {
+        const ParsedQuantity parsed = parse_quantity(text, Dimension::time);
+        CHECK(parsed.problem == "'" + std::string(text) + "' is not a time");
+        CHECK(parsed.hint == "write '10 min'");
+    }
+    CHECK(parse_quantity("1:30", Dimension::time).hint == "write '90 min'");
+    CHECK(parse_quantity("0:00:30", Dimension::time).hint == "write '30 s'");
+    const std::string usual =
+        "write a number with a unit, such as '15 min' (units: s, min, h, hr, d)";
+    for (const char* text : {"0:", ":10", "0:1:2:3", "0:x", ":", "-0:10"})
+        CHECK(parse_quantity(text, Dimension::time).hint == usual);
+    CHECK(parse_quantity(std::string(500, '9') + ":00", Dimension::time).hint == usual);
+}
+
+TEST_CASE("a long value is cut short in a message, at a whole character") {
+    std::string dots(59, '.');
+    CHECK(parse_quantity(dots + "\xC3\xA9" + std::string(1000, 'x'), Dimension::depth).problem ==
+          "'" + dots + "\xC3\xA9...' is not a depth");
+    CHECK(parse_quantity("3 " + std::string(61, 'y'), Dimension::depth).problem ==
+          "'" + std::string(60, 'y') + "...' is not a unit of depth");
+    CHECK(parse_quantity("3 " + std::string(60, 'y'), Dimension::depth).problem ==
+          "'" + std::string(60, 'y') + "' is not a unit of depth");
 }
 
 TEST_CASE("shares take fractions and percentages, bare numbers take no unit") {

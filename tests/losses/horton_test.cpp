@@ -42,6 +42,7 @@ TEST_CASE("depth and time on Horton's curve invert each other") {
     CHECK_THAT(horton_time_at_depth(capped, horton_cumulative(capped, 1.0)), WithinRel(1.0, 1e-13));
     CHECK(horton_time_at_depth({8.0, 8.0, 2.0}, 4.0) == 0.5);
     CHECK(horton_time_at_depth({8.0, 2.0, 0.0}, 4.0) == 0.5);
+    CHECK(horton_time_at_depth({8.0, 2.0, 1e-308}, 4.0) == 0.5);  // k too small to fall
 }
 
 TEST_CASE("time on Horton's curve agrees with the Lambert W function of Boost.Math") {

@@ -13,6 +13,7 @@ TEST_CASE("a cell that is not understood is refused where it stands") {
               R"(gauge.csv:2:2: error: this row has 1 cell, the header 2
     5
      ^
+    write every cell, or begin the line with # if it is a note
 gauge.csv:3:5: error: this row has 3 cells, the header 2
     10,0,4
         ^
@@ -28,9 +29,11 @@ gauge.csv:3:5: error: this row has 3 cells, the header 2
               R"(gauge.csv:2:2: error: this row has 1 cell, the header 2
     5
      ^
+    write every cell, or begin the line with # if it is a note
 gauge.csv:3:7: error: this row has 3 cells, the header 2
     10;0,4;
           ^
+    remove what is behind the last cell, or name its column in the header
 )");
     }
     SECTION("not a number") {
@@ -230,7 +233,7 @@ gauge.csv:4:1: error: '2026-03-04 10:60' is no time of the day
 gauge.csv:5:1: error: '04/03/2026 10:05' is not a timestamp
     04/03/2026 10:05,1
     ^
-    write 2026-03-04T10:05 or 2026-03-04 10:05:00+01:00
+    write year-month-day and the time of the day, 2026-03-04 10:05 or 2026-04-03 10:05
 gauge.csv:6:1: error: '2026-03-04T10:05+19:00' has an impossible UTC offset
     2026-03-04T10:05+19:00,1
     ^

@@ -7,7 +7,7 @@ TEST_CASE("a file that cannot be a hyetograph is refused") {
     SECTION("empty") {
         CsvLayout layout;
         CHECK(problems_in("", layout) ==
-              R"(gauge.csv: error: the file holds no rows
+              R"(gauge.csv:1:1: error: the file holds no rows
     a file begins with a row such as 'end [min],depth [mm]', then one row per step
 )");
     }
@@ -16,7 +16,9 @@ TEST_CASE("a file that cannot be a hyetograph is refused") {
         CHECK(problems_in("# nothing\n"
                           "\n",
                           layout) ==
-              R"(gauge.csv: error: the file holds no rows
+              R"(gauge.csv:1:1: error: the file holds no rows
+    # nothing
+    ^
     a file begins with a row such as 'end [min],depth [mm]', then one row per step
 )");
     }
@@ -26,7 +28,7 @@ TEST_CASE("a file that cannot be a hyetograph is refused") {
                                       "e\0n\0",
                                       6),
                           layout) ==
-              R"(gauge.csv: error: the file is UTF-16 text
+              R"(gauge.csv:1:1: error: the file is UTF-16 text
     save it as UTF-8
 )");
     }
@@ -36,7 +38,9 @@ TEST_CASE("a file that cannot be a hyetograph is refused") {
         CHECK(problems_in("end,depth [mm]\n"
                           "2026-03-04T10:05,1\n",
                           layout) ==
-              R"(gauge.csv: error: time zone 'Europe/Madrit' is not known here
+              R"(gauge.csv:1:1: error: time zone 'Europe/Madrit' is not known here
+    end,depth [mm]
+    ^
     write a name of the time zone database, such as Europe/Madrid
 )");
     }
@@ -57,7 +61,9 @@ TEST_CASE("a file that cannot be a hyetograph is refused") {
         CHECK(problems_in("end [min],depth [mm]\n"
                           "5,1\n",
                           layout) ==
-              R"(gauge.csv: error: every: 0 h is no length of a step
+              R"(gauge.csv:1:1: error: every: 0 h is no length of a step
+    end [min],depth [mm]
+    ^
     state how long each row covers, every: 5 min
 )");
     }
@@ -72,11 +78,11 @@ TEST_CASE("a header that is not understood is refused with the way out") {
               R"(gauge.csv:1:1: error: there is no time column
     tme [min],rainfall [mm]
     ^
-    is 'tme [min]' meant to be 'time'? columns here: 'tme [min]', 'rainfall [mm]'; call it 'end [min]', or 'end' for timestamps
+    is 'tme [min]' meant to be 'time'? columns here: 'tme [min]', 'rainfall [mm]'; call it 'end [min]', or 'end' for timestamps; or say in the scenario: hyetograph: {file: gauge.csv, time: 'tme [min]', stamp: end, rain: 'rainfall [mm]', kind: depth}
 gauge.csv:1:1: error: there is no rain column
     tme [min],rainfall [mm]
     ^
-    columns here: 'tme [min]', 'rainfall [mm]'; call it 'depth [mm]', 'intensity [mm/h]' or 'cumulative [mm]'
+    columns here: 'tme [min]', 'rainfall [mm]'; call it 'depth [mm]', 'intensity [mm/h]' or 'cumulative [mm]'; or say in the scenario: hyetograph: {file: gauge.csv, time: 'tme [min]', stamp: end, rain: 'rainfall [mm]', kind: depth}
 )");
     }
     SECTION("round brackets") {
@@ -87,11 +93,11 @@ gauge.csv:1:1: error: there is no rain column
               R"(gauge.csv:1:1: error: there is no time column
     end (min),depth (mm)
     ^
-    is 'end (min)' meant to be 'end'? columns here: 'end (min)', 'depth (mm)'; call it 'end [min]', or 'end' for timestamps
+    units stand in square brackets: 'end [min]'; or say in the scenario: hyetograph: {file: gauge.csv, time: 'end (min)', time_unit: min, stamp: end, rain: 'depth (mm)', kind: depth, unit: mm}
 gauge.csv:1:1: error: there is no rain column
     end (min),depth (mm)
     ^
-    is 'depth (mm)' meant to be 'depth'? columns here: 'end (min)', 'depth (mm)'; call it 'depth [mm]', 'intensity [mm/h]' or 'cumulative [mm]'
+    units stand in square brackets: 'depth [mm]'; or say in the scenario: hyetograph: {file: gauge.csv, time: 'end (min)', time_unit: min, stamp: end, rain: 'depth (mm)', kind: depth, unit: mm}
 )");
     }
     SECTION("two times") {
@@ -125,7 +131,7 @@ gauge.csv:1:1: error: there is no rain column
               R"(gauge.csv:1:11: error: column 'depth' has no unit
     end [min],depth
               ^
-    write it in brackets, 'depth [mm]' or 'depth [in]'
+    write it in brackets, 'depth [mm]' or 'depth [in]', or state unit: mm in the scenario
 )");
     }
     SECTION("intensity without unit") {
@@ -136,7 +142,7 @@ gauge.csv:1:1: error: there is no rain column
               R"(gauge.csv:1:11: error: column 'intensity' has no unit
     end [min],intensity
               ^
-    write it in brackets, 'intensity [mm/h]' or 'intensity [in/h]'
+    write it in brackets, 'intensity [mm/h]' or 'intensity [in/h]', or state unit: mm/h in the scenario
 )");
     }
     SECTION("time without unit") {
@@ -148,7 +154,7 @@ gauge.csv:1:1: error: there is no rain column
               R"(gauge.csv:1:1: error: column 'end' has no unit, but holds numbers
     end,depth [mm]
     ^
-    write the unit of elapsed times in brackets, 'end [min]'; only timestamps go without
+    write the unit of elapsed times in brackets, 'end [min]', or state time_unit: min in the scenario; only timestamps go without
 )");
     }
     SECTION("unit of time") {

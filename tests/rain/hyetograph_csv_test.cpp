@@ -49,6 +49,9 @@ TEST_CASE("the same rain in every accepted dress") {
              "\"end [min]\",\"depth [mm]\"\n\"5\",\"0.4\"\n\"10\" , \" 1.1\"\n",
              "End [min],DEPTH [mm]\n5,0.4\n10,1.1\n",
              "depth [mm],end [min]\n0.4,5\n1.1,10\n",
+             ";;\n;\nend [min];depth [mm]\n;\n5;0,4\n ; \n10;1,1\n;;;\n;\n",
+             "end [min],depth [mm]\n5,0.4\n,\n\"\" , \"\"\n10,1.1\n,,,\n,",
+             "end [min]\tdepth [mm]\n\t\n5\t0.4\n10\t1.1\n\t\t\"\"\n",
              "site,end [min],note,depth [mm],\nM1,5,\"wind, \"\"gusts\"\"\",0.4,\nM1,10,,1.1,\n",
              "end [min],depth [cm]\n5,0.04\n+10,1.1e-1\n",
              "end [min],intensity [mm/h]\n5,4.8\n10,13.2\n",
@@ -97,7 +100,13 @@ TEST_CASE("the scenario names columns and states what they mean") {
 TEST_CASE("units and kinds stated in the scenario") {
     CsvLayout layout;
     layout.rain_unit = "in";
+    CHECK(read_clean("end [min],depth\n5,1\n", layout).depth_mm == Numbers{25.4});
+    CHECK(read_clean("end [min],depth [in]\n5,1\n", layout).depth_mm == Numbers{25.4});
+    layout.rain_column = "depth [mm]";
     CHECK(read_clean("end [min],depth [mm]\n5,1\n", layout).depth_mm == Numbers{25.4});
+    layout.rain_column.reset();
+    layout.rain_unit = "in/hr";
+    CHECK(read_clean("end [h],intensity [in/h]\n1,1\n", layout).depth_mm == Numbers{25.4});
     layout.rain_unit.reset();
     layout.kind = RainKind::cumulative;
     CHECK(read_clean("end [h],depth [mm],cumulative [in]\n1,9,1\n2,9,1\n", layout).depth_mm ==
@@ -279,6 +288,7 @@ TEST_CASE("a row that cannot be read is no hole as well") {
         R"(gauge.csv:3:2: error: this row has 1 cell, the header 3
     5
      ^
+    write every cell, or begin the line with # if it is a note
 gauge.csv:5:1: error: 'x' is not a number
     x,20,1
     ^

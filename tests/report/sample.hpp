@@ -91,6 +91,8 @@ inline PlaceLedger joint(std::string name) {
     place.rows = {{{0.4, 0.0, 0.1, 0.0, 0.3, 0.0}, kNone},
                   {{12.5, 0.0, 0.15, 2.0625, 2.125, 8.4625}, kNone}};
     place.total = {12.9, 0.0, 0.25, 2.0625, 2.125, 8.4625};
+    place.ponding_start_h = 0.1;
+    place.runoff_start_h = 0.0907;
     place.closure_mm = 2.0e-15;
     place.figures = {54.16, 8.4625 / 12.9, 101.55, {180.5, 90.3, 60.2, 30.1}};
     return place;

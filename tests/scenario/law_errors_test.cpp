@@ -111,7 +111,7 @@ lane.yaml:5:109: error: moisture_deficit: '1.2' is not between 0 and 1
         R"(lane.yaml:5:108: error: moisture_deficit: '20 %' has a unit where a plain number belongs
     ...n_ampt: {effective_conductivity: 3 mm/h, wetting_front_suction: 110 mm, moisture_deficit: 20 %}}
                                                                                                  ^
-    write a plain number from 0 to 1, such as 0.2
+    write 0.20
 )");
     CHECK(problems(with_losses(
               "{green_ampt: {wetting_front_suction: 110 mm, moisture_deficit: 0.2}}")) ==

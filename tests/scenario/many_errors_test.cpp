@@ -53,6 +53,34 @@ TEST_CASE("a long list of errors is cut short") {
                Contains("too many errors in 'depths'; the rest of it is not read"));
 }
 
+TEST_CASE("a long value is cut short in its message") {
+    const std::string name(500, 'n');
+    const std::string cut_name = "'" + std::string(60, 'n') + "...'";
+    const std::string all = problems(
+        kQuietStorm + "surfaces:\n  " + name + ":\n    losses: " + std::string(500, 'z') +
+        "\n    runs_onto: " + std::string(500, 'r') + "\n    " + std::string(500, 'k') + ": 1\n");
+    CHECK_THAT(all, Contains("error: 'area' is missing from surface " + cut_name + "\n"));
+    CHECK_THAT(all, Contains("error: losses: '" + std::string(60, 'z') +
+                             "...' is not a kind of losses\n"));
+    CHECK_THAT(
+        all, Contains("error: runs_onto: there is no surface '" + std::string(60, 'r') + "...'\n"));
+    CHECK_THAT(all, Contains("error: unknown key '" + std::string(60, 'k') + "...' in surface " +
+                             cut_name + "\n"));
+    for (const char letter : {'n', 'z', 'r', 'k'})
+        CHECK_THAT(all, !Contains(std::string(100, letter)));
+}
+
+TEST_CASE("a long loop names its first surfaces and its last") {
+    std::string text = kQuietStorm + "surfaces:\n";
+    for (int i = 0; i < 100; ++i)
+        text += "  s" + std::to_string(i) + ": {area: 1 ha, losses: impervious, runs_onto: s" +
+                std::to_string((i + 1) % 100) + "}\n";
+    CHECK_THAT(problems(text),
+               Contains("error: run-on goes round in a loop: s0 -> s1 -> s2 -> s3 -> s4 -> s5 -> "
+                        "s6 -> s7 -> s8 -> s9 -> s10 -> s11 -> s12 -> s13 -> s14 -> s15 -> s16 -> "
+                        "s17 -> s18 -> (80 more) -> s99 -> s0\n"));
+}
+
 TEST_CASE("a long line is not shown, its place is") {
     const std::string padding(5000, ' ');
     CHECK(problems(with_storm("{" + padding +

@@ -45,6 +45,10 @@ lane.yaml:5:104: warning: moisture_deficit is 0.7, above 0.6
     ...{green_ampt: {effective_conductivity: 3 m/h, wetting_front_suction: 3 m, moisture_deficit: 0.7}}
                                                                                                   ^
     a deficit is at most the porosity, about 0.5
+lane.yaml:5:104: warning: a dry start: a moisture deficit of 0.7 is drier than field capacity in every texture class finer than loamy sand
+    ...{green_ampt: {effective_conductivity: 3 m/h, wetting_front_suction: 3 m, moisture_deficit: 0.7}}
+                                                                                                  ^
+    porosity less 33 kPa water content, Rawls, Brakensiek and Saxton 1982, Trans. ASAE 25 (from memory)
 )");
     CHECK(problems(with_losses("{green_ampt: {effective_conductivity: 3 mm/h, "
                                "wetting_front_suction: 0.5 mm, moisture_deficit: 0.2}}")) ==

@@ -23,9 +23,19 @@ Marched march(const std::string& yaml) {
     return marched;
 }
 
+/// The warnings as "LINE:COLUMN: MESSAGE".
+std::vector<std::string> warnings_of(const Marched& marched) {
+    Diagnostics diagnostics;
+    warn_of_results(marched.scenario, marched.scenario.storms[0], marched.ledger, diagnostics);
+    std::vector<std::string> out;
+    for (const Diagnostic& each : diagnostics.list())
+        out.push_back(std::to_string(each.place.line) + ":" + std::to_string(each.place.column) +
+                      ": " + each.message);
+    return out;
+}
+
 std::vector<std::string> warnings_of(const std::string& yaml) {
-    const Marched marched = march(yaml);
-    return result_warnings(marched.scenario.storms[0], marched.scenario.site, marched.ledger);
+    return warnings_of(march(yaml));
 }
 
 std::string named_storm(const std::string& steps, const std::string& losses) {
@@ -39,13 +49,18 @@ using Strings = std::vector<std::string>;
 
 TEST_CASE("a curve number with little excess") {
     // CN 80: S = 63.5 mm, Ia = 12.7 mm. 20 mm of rain leave 7.3^2/70.8 = 0.75 mm; 12 mm leave none.
-    CHECK(warnings_of(named_storm("{every: 10 h, depths: [20], unit: mm}",
-                                  "{curve_number: {number: 80}}")) ==
-          Strings{
-              "lawn in morning: a curve number answers poorly under 12.7 mm of excess, and this is "
-              "0.8 mm"});
+    CHECK(
+        warnings_of(
+            named_storm("{every: 10 h, depths: [20], unit: mm}", "{curve_number: {number: 80}}")) ==
+        Strings{"2:12: lawn in morning: a curve number answers poorly under 12.7 mm of excess, and "
+                "this is 0.8 mm"});
+    CHECK(
+        warnings_of(
+            named_storm("{every: 10 h, depths: [12], unit: mm}", "{curve_number: {number: 80}}")) ==
+        Strings{"2:12: lawn in morning: a curve number answers poorly under 12.7 mm of excess, and "
+                "this is 0.0 mm"});
     CHECK(warnings_of(
-              named_storm("{every: 10 h, depths: [12], unit: mm}", "{curve_number: {number: 80}}"))
+              named_storm("{every: 10 h, depths: [0], unit: mm}", "{curve_number: {number: 80}}"))
               .empty());
     CHECK(warnings_of(
               named_storm("{every: 10 h, depths: [100], unit: mm}", "{curve_number: {number: 80}}"))
@@ -58,8 +73,9 @@ TEST_CASE("a step long against the ponding time") {
     CHECK(warnings_of("storm: {steps: {every: 60 min, depths: [0, 6.6666666666666667], unit: mm}}\n"
                       "surfaces: {lawn: {area: 1 ha, losses: " +
                       law + "}}\n") ==
-          Strings{"lawn: the rain's step of 1 h is long against the 45.0 min from first rain to "
-                  "ponding; finer rain would pond at another time"});
+          Strings{
+              "2:12: lawn: the rain's step of 60 min is long against the 45 min from first rain to "
+              "ponding; finer rain would pond at another time"});
     CHECK(warnings_of("storm: {steps: {every: 15 min, depths: [0, 1, 1, 1, 1, 2, 2], unit: mm}}\n"
                       "surfaces: {lawn: {area: 1 ha, losses: " +
                       law + "}}\n")
@@ -80,12 +96,10 @@ TEST_CASE("what was taken as dry and what stayed coarse are told of the storm an
     Marched marched = march(with_losses("impervious"));
     marched.scenario.storms[0].rain.taken_as_dry_h = 0.25;
     marched.ledger.coarse_run_on = CoarseRunOn{3e-6};
-    CHECK(
-        result_warnings(marched.scenario.storms[0], marched.scenario.site, marched.ledger) ==
-        Strings{
-            "storm: 15 min of the record had no values and were taken as dry",
-            "site: run-on below a surface that infiltrates is handed over in parts of a step that "
-            "leave the accounts below it uncertain by 3e-06 mm"});
+    CHECK(warnings_of(marched) ==
+          Strings{"1:1: storm: 15 min of the record had no values and were taken as dry",
+                  "1:1: site: run-on below a surface that infiltrates is handed over in parts of a "
+                  "step that leave the accounts below it uncertain by 0.000003 mm"});
 }
 
 TEST_CASE("a phi index that cannot be matched is an error at the observed excess") {

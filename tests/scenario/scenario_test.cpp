@@ -247,10 +247,11 @@ TEST_CASE("a share of all is a name alone, and shares may sum to one by rounding
 TEST_CASE("a scenario file names rain beside it") {
     const Folder folder;
     folder.write("rain.csv", "end [min],depth [mm]\n5,0.4\n10,1.1\n");
-    const std::string path = folder.write("lane.yaml",
-                                          "storms:\n  plain: {hyetograph: rain.csv}\n  named: "
-                                          "{hyetograph: {file: rain.csv, unit: in}}\n"
-                                          "surfaces: {lot: {area: 1 ha, losses: impervious}}\n");
+    const std::string path =
+        folder.write("lane.yaml",
+                     "storms:\n  plain: {hyetograph: rain.csv}\n  named: "
+                     "{hyetograph: {file: rain.csv, rain: 'depth [mm]', unit: in}}\n"
+                     "surfaces: {lot: {area: 1 ha, losses: impervious}}\n");
     Diagnostics diagnostics;
     const auto scenario = read_scenario(path, diagnostics);
     for (const Diagnostic& diagnostic : diagnostics.list())
@@ -260,6 +261,35 @@ TEST_CASE("a scenario file names rain beside it") {
     CHECK(scenario->storms[0].file == "rain.csv");
     CHECK(scenario->storms[0].rain.depth_mm == std::vector<double>{0.4, 1.1});
     CHECK_THAT(scenario->storms[1].rain.depth_mm[1], WithinRel(1.1 * 25.4, 1e-15));
+}
+
+TEST_CASE("a wrong word about a rain file is one error, and its rows are still looked at") {
+    const Folder folder;
+    folder.write("rain.csv", "# gauge\ntime [min],P [mm]\n5,0.4\n10,wet\n");
+    folder.write("starts.csv", "start [min],depth [mm]\n5,0.4\n10,1.1\n");
+    folder.write("stamps.csv", "end,depth [mm]\n2024-03-01T10:05,0.4\n2024-03-01T10:10,1.1\n");
+    const auto heads = [&](const std::string& layout) {
+        const std::string path = folder.write(
+            "lane.yaml", "storm: {hyetograph: {" + layout +
+                             "}}\nsurfaces: {lot: {area: 1 ha, losses: impervious}}\n");
+        Diagnostics diagnostics;
+        CHECK_FALSE(read_scenario(path, diagnostics));
+        std::string out;
+        for (const Diagnostic& each : diagnostics.list())
+            out += std::to_string(each.place.line) + ": " + each.message + "\n";
+        return out;
+    };
+    CHECK(heads("file: rain.csv, rain: 'P [mm]', kind: depth, stamp: middle") ==
+          "1: stamp: 'middle' is not a choice here\n4: 'wet' is not a number\n");
+    CHECK(heads("file: rain.csv, rain: 'P [mm]', unit: mm, kind: total, stamp: end") ==
+          "1: kind: 'total' is not a choice here\n4: 'wet' is not a number\n");
+    CHECK(heads("file: starts.csv, stamp: middle") == "1: stamp: 'middle' is not a choice here\n");
+    CHECK(heads("file: starts.csv, kind: total") == "1: kind: 'total' is not a choice here\n");
+    CHECK(heads("file: starts.csv, unit: mm, kind: intensity") ==
+          "1: unit: 'mm' does not go with 'kind: intensity'\n");
+    CHECK(heads("file: starts.csv, unit: inches") == "1: unit: 'inches' is not a unit here\n");
+    CHECK(heads("file: stamps.csv, zone: Middle/Nowhere") ==
+          "1: zone: 'Middle/Nowhere' is not in the time zone database\n");
 }
 
 TEST_CASE("errors in a rain file stand beside those of the scenario") {

@@ -37,6 +37,9 @@ surfaces:
   roof:
     area: 100 m2
     losses: impervious
+  "quoted":
+    area: 100 m2
+    losses: {curve_number: {number: "89", initial_abstraction_ratio: "+.2"}}
 """
 
 # A path into the sample and the value put there; None takes the key out.
@@ -58,6 +61,11 @@ SPOILED = [
     (["storm", "steps", "intensities"], [1, 2]),
     (["surfaces", "site"], {"area": "1 ha", "losses": "impervious"}),
     (["surfaces", "a.b"], {"area": "1 ha", "losses": "impervious"}),
+    (["surfaces", "  "], {"area": "1 ha", "losses": "impervious"}),
+    (["surfaces", "a\u202eb"], {"area": "1 ha", "losses": "impervious"}),
+    (["title"], "a\x1b[31mb"),
+    (["surfaces", "roof", "drains_to"], "CB-1, CB-2"),
+    (["surfaces", "roof", "drains_to"], "CB\x07"),
     (["surfaces", "roof", "area"], None),
     (["surfaces", "roof", "area"], 100),
     (["surfaces", "roof", "area"], "100 mm"),
@@ -78,6 +86,9 @@ SPOILED = [
     (["surfaces", "yard", "losses", "curve_number", "cn"], 80),
     (["surfaces", "yard", "losses", "curve_number", "number"], 0),
     (["surfaces", "yard", "losses", "curve_number", "number"], 101),
+    (["surfaces", "yard", "losses", "curve_number", "number"], "89 %"),
+    (["surfaces", "yard", "losses", "curve_number", "initial_abstraction_ratio"], 20),
+    (["surfaces", "yard", "losses", "curve_number", "tabulated_ratio"], "-0.2"),
     (["surfaces", "yard", "losses", "curve_number", "antecedent"], "IV"),
 ]
 

@@ -182,7 +182,7 @@ TEST_CASE("losses must be there and be one law") {
     here it is called 'impervious'
 )");
     CHECK(problems(with_losses("[horton]")) ==
-          R"(lane.yaml:5:13: error: 'losses' takes a single value, not a list
+          R"(lane.yaml:5:13: error: 'losses' takes a word or a map of one law, not a list
         losses: [horton]
                 ^
     write 'losses: impervious', or one law with its parameters, such as 'constant_rate: {rate: 7.5 mm/h}'
@@ -324,7 +324,7 @@ surfaces:
   verge: {area: 1 ha, losses: impervious, runs_onto: [lawn]}
   lawn: {area: 1 ha, losses: impervious}
   yard: {area: 1 ha, losses: impervious, runs_onto: }
-)") == R"(lane.yaml:3:54: error: 'runs_onto' takes a single value, not a list
+)") == R"(lane.yaml:3:54: error: 'runs_onto' takes a name or a map, not a list
       verge: {area: 1 ha, losses: impervious, runs_onto: [lawn]}
                                                          ^
     write a surface's name, or shares such as 'runs_onto: {verge: 30 %}'

@@ -40,10 +40,10 @@ TEST_CASE("YAML that cannot be parsed is shown where it breaks") {
 )");
     CHECK(problems(R"(storm:
 	steps: 1
-)") == R"(lane.yaml:2:7: error: this cannot be read as YAML: this colon follows nothing that can be a key
+)") == R"(lane.yaml:2:1: error: this cannot be read as YAML: a tab stands here; YAML takes spaces only
      steps: 1
-          ^
-    look at the indentation, colons, quotes and brackets here and just before
+    ^
+    put spaces in place of the tabs before the text
 )");
     CHECK(problems(R"(storm: 1
  steps: 2
@@ -56,7 +56,7 @@ TEST_CASE("YAML that cannot be parsed is shown where it breaks") {
 )") == R"(lane.yaml:1:9: error: this cannot be read as YAML: this colon follows nothing that can be a key
     storm: 1: 2
             ^
-    look at the indentation, colons, quotes and brackets here and just before
+    put the text after the first colon in quotes
 )");
     CHECK(problems(R"(storm: *nowhere
 )") == R"(lane.yaml:1:8: error: this cannot be read as YAML: '*' refers to a name that no '&' defines

@@ -22,8 +22,8 @@ void append_shortest(std::string& out, double value);
 /// `value` with a fixed number of decimals, for people; a value that rounds to zero has no sign.
 [[nodiscard]] std::string fixed(double value, int decimals);
 
-/// `value` to three significant figures without an exponent (342, 34.2, 3.42, 0.342), for people;
-/// decimals stop at three.
+/// `value` to three significant figures without an exponent (1180000, 342, 3.42, 0.0342), for
+/// people; decimals stop at six, and what rounds to nothing there is "0".
 [[nodiscard]] std::string three_figures(double value);
 
 }  // namespace rainledger

@@ -8,7 +8,7 @@
 namespace rainledger {
 
 /// The content of a file, or nothing with `problem` saying why ("no such file or directory").
-/// A directory cannot be read.
+/// A directory cannot be read, nor a file of more than 1 GiB.
 [[nodiscard]] std::optional<std::string> read_whole_file(const std::string& path,
                                                          std::string& problem);
 

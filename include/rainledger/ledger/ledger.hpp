@@ -72,6 +72,8 @@ struct PlaceLedger {
     double area_m2 = 0.0;
     std::vector<LedgerRow> rows;
     Accounts total;
+    std::optional<double> ponding_start_h;  ///< the earliest of its surfaces
+    std::optional<double> runoff_start_h;   ///< first excess of a surface that reaches the place
     double closure_mm = 0.0;
     ExcessFigures figures;
 };

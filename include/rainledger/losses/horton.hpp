@@ -15,6 +15,9 @@
 // f0 initial capacity, fc final capacity (mm/h), k decay (1/h), te time on the curve (h).
 namespace rainledger {
 
+/// Decays below this fall by nothing in any storm, and (f0 - fc)/k would overflow: they count as 0.
+inline constexpr double kSlowestDecay = 1.0e-200;  // 1/h
+
 /// Parameters of Horton's curve. f0 >= fc >= 0, k >= 0, all finite. k = 0 or f0 = fc is a constant
 /// capacity f0.
 struct HortonCurve {
@@ -76,7 +79,7 @@ private:
     [[nodiscard]] double drop() const {  // f0 - fc
         return curve.initial_capacity_mm_per_h - curve.final_capacity_mm_per_h;
     }
-    [[nodiscard]] bool falls() const { return curve.decay_per_h > 0.0 && drop() > 0.0; }
+    [[nodiscard]] bool falls() const { return curve.decay_per_h > kSlowestDecay && drop() > 0.0; }
     [[nodiscard]] double at_e(double e) const { return curve.final_capacity_mm_per_h + drop() * e; }
     [[nodiscard]] double time_below_solved(const State& state, double supply) const;
     [[nodiscard]] double solved_e(const State& state) const;

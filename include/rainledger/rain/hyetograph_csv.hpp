@@ -19,7 +19,8 @@ enum class StampMeaning { start, end };
 struct CsvLayout {
     std::optional<std::string> time_column;  ///< header of the time column, in full
     std::optional<std::string> rain_column;  ///< header of the rain column, in full
-    std::optional<std::string> rain_unit;    ///< "mm", "in", "mm/h", ...: replaces the bracket
+    std::optional<std::string> rain_unit;    ///< "mm", "in", "mm/h", ...: replaces the bracket of a
+                                             ///< column named by rain_column, else may only fill it
     std::optional<std::string> time_unit;    ///< "s", "min", "h": replaces the bracket
     std::optional<RainKind> kind;
     std::optional<StampMeaning>
@@ -33,10 +34,11 @@ struct CsvLayout {
 /// Reads a hyetograph. Every problem is added to `diagnostics` with its line and column; after
 /// twenty errors the rest are counted, not listed. Nothing is returned if any was an error.
 ///
-/// Text: UTF-8 with or without a byte-order mark; lines end in LF or CRLF; blank lines and lines
-/// that begin with `#` say nothing. The header row decides the separator: tab, else semicolon, else
-/// comma. Cells may be padded with blanks and may stand in quotes, within their line. Decimal
-/// commas are read where the separator is none, but not mixed with decimal points.
+/// Text: UTF-8 with or without a byte-order mark; lines end in LF or CRLF; blank lines, rows of
+/// nothing but empty cells and lines that begin with `#` say nothing. The header row decides the
+/// separator: tab, else semicolon, else comma. Cells may be padded with blanks and may stand in
+/// quotes, within their line. Decimal commas are read where the separator is none, but not mixed
+/// with decimal points.
 ///
 /// Columns are found by name, whatever the case: `start`, `end`, both, or `time`; and `depth`,
 /// `intensity` or `cumulative`, each with its unit in square brackets; timestamps have none. A name
@@ -51,7 +53,11 @@ struct CsvLayout {
 /// A cumulative reading stands at the end of its row's step and counts from 0; a first row at
 /// elapsed time 0 of `end` times is a baseline instead. Where readings are missing or holes lie
 /// between, those steps are dry and what fell meanwhile falls in the step of the next reading, so
-/// that nothing is lost. With timestamps a first reading larger than every later rise is a warning.
+/// that nothing is lost. With timestamps a first reading above 0 is a warning, since nothing says
+/// that the counter stood at 0 when the storm began.
+///
+/// Errors too: a step shorter than 1 ms, and a time, depth or intensity above 1e12 h, mm or mm/h.
+/// A warning too: a step made longer or shorter than the one beside it by a change of UTC offset.
 ///
 /// An empty cell, NA, NaN and the stated mark are missing values. Zones: see Zone::instant.
 [[nodiscard]] std::optional<Hyetograph> read_hyetograph_csv(const std::string& name,

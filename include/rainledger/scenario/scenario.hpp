@@ -17,6 +17,7 @@ struct Storm {
     Hyetograph rain;   ///< with multiply_by and continue_for applied
     double multiply_by = 1.0;
     double continued_h = 0.0;
+    Place place;       ///< of its name, for messages that only the march can give
     std::string file;  ///< the rain's file as the scenario names it; empty for steps written out
 };
 
