@@ -18,7 +18,10 @@ namespace rainledger {
 namespace {
 
 std::string read_title(const ClosedMap& map) {
-    const auto title = map.text("title", "write a title, or take the key out");
+    auto title = map.text("title", "write a title, or take the key out");
+    // A title written as a block ends in a line break that belongs to YAML.
+    while (title && title->ends_with('\n'))
+        title->pop_back();
     if (title && holds_hidden_characters(*title))
         map.reading().error(map.mark_of("title"),
                             "title: " + in_quotes(*title) + " holds a character that is not shown",

@@ -199,6 +199,9 @@ std::optional<double> read_quantity(const Reading& reading, const Entry& entry, 
     if (!(value <= kLargestValue))
         return refuse(in_quotes(*text) + " is too large to compute with",
                       "check the number and its unit");
+    if (value > 0.0 && value < kSmallestValue)
+        return refuse(in_quotes(*text) + " is too small to compute with",
+                      "write 0, or check the number and its unit");
     return value;
 }
 

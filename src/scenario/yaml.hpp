@@ -93,6 +93,8 @@ enum class Least { zero, above_zero };
 
 /// The largest magnitude taken, in canonical units: products of a few such values stay finite.
 inline constexpr double kLargestValue = 1.0e12;
+/// The smallest quantity above zero, likewise: ratios of smaller ones leave the range of numbers.
+inline constexpr double kSmallestValue = 1.0e-100;
 
 /// A map whose keys are a closed list. Unknown keys are errors that name what was probably meant.
 class ClosedMap {

@@ -24,10 +24,11 @@ void check_invariants(const Hyetograph& rain) {
     if (rain.stamps) REQUIRE(rain.stamps->unix_ms.size() == steps + 1);
     if (rain.stamps) REQUIRE(rain.stamps->offset_minutes.size() == steps + 1);
     for (std::size_t i = 0; i < steps; ++i) {
-        REQUIRE(std::isfinite(rain.depth_mm[i]));
         REQUIRE(rain.depth_mm[i] >= 0.0);
-        REQUIRE(std::isfinite(rain.duration_h[i]));
-        REQUIRE(rain.duration_h[i] > 0.0);
+        REQUIRE(rain.depth_mm[i] <= 1e12);
+        REQUIRE(rain.intensity_mm_per_h(i) <= 1e12 * (1.0 + 1e-15));
+        REQUIRE(rain.duration_h[i] > 0.9999 / 3.6e6);
+        REQUIRE(std::abs(rain.edges_h[i + 1]) <= 1e12);
         REQUIRE(rain.edges_h[i + 1] > rain.edges_h[i]);
     }
 }

@@ -275,4 +275,15 @@ TEST_CASE("ratios are shares of one with a published conversion") {
 )");
 }
 
+TEST_CASE("numbers too small to compute with") {
+    CHECK(
+        problems(with_losses("{horton: {initial_capacity: 50 mm/h, final_capacity: 6 mm/h, decay: "
+                             "1e-308 1/h}}")) ==
+        R"(lane.yaml:5:81: error: decay: '1e-308 1/h' is too small to compute with
+        losses: {horton: {initial_capacity: 50 mm/h, final_capacity: 6 mm/h, decay: 1e-308 1/h}}
+                                                                                    ^
+    write 0, or check the number and its unit
+)");
+}
+
 }  // namespace rainledger

@@ -97,6 +97,11 @@ surfaces:
     CHECK(scenario.places[1].observed_excess.line == 0);
 }
 
+TEST_CASE("a title written as a block ends with its text") {
+    CHECK(must_read("title: |\n  Tannery Lane\n" + with_losses("impervious")).title ==
+          "Tannery Lane");
+}
+
 TEST_CASE("without a title the file's name stands for it") {
     CHECK(must_read(with_losses("impervious")).title == "lane.yaml");
 }
