@@ -7,6 +7,7 @@
 #include <fmt/core.h>
 
 #include "rainledger/base/number.hpp"
+#include "report/clock.hpp"
 #include "report/loss_words.hpp"
 #include "report/summary_parts.hpp"
 #include "report/text_table.hpp"
@@ -49,6 +50,14 @@ void add_rows(TextTable& table, const StormOnSite& on, CellsOf cells_of) {
     table.rule();
     for (const Area& area : joint_areas(on))
         table.row(cells_of(area));
+}
+
+/// The length of the step with the heaviest rain, h.
+double heaviest_step_h(const Hyetograph& rain) {
+    std::size_t heaviest = 0;
+    for (std::size_t step = 1; step < rain.own_steps; ++step)
+        if (rain.intensity_mm_per_h(step) > rain.intensity_mm_per_h(heaviest)) heaviest = step;
+    return rain.duration_h[heaviest];
 }
 
 bool has_run_on(const StormOnSite& on) {
@@ -136,6 +145,13 @@ std::string excess_part(const StormOnSite& on) {
                       "rational method\n"
                       "  Flows are the excess averaged over the worst minutes, before any travel "
                       "time.\n";
+    const double step_h = heaviest_step_h(on.storm.rain);
+    constexpr double kShortestWindowH = kWindowsMinutes.front() / 60.0;
+    if (step_h > 1.2 * kShortestWindowH)
+        out += fmt::format(
+            "  The heaviest rain is an average over its step of {}; over fewer minutes the flow\n"
+            "  may have been higher.\n",
+            duration_text(step_h));
     if (has_run_on(on))
         out +=
             "  Excess that runs onto another surface stands in both rows (whose coefficient can\n"

@@ -134,21 +134,19 @@ std::string wrapped(std::string lead, std::string_view text, std::size_t width,
                     std::size_t indent) {
     std::string out = std::move(lead);
     std::size_t used = shown_width(out);
-    bool line_has_phrase = false;
     while (!text.empty()) {
-        const std::string_view phrase = first_phrase(text);
+        std::string_view phrase = first_phrase(text);
         text.remove_prefix(phrase.size());
-        const std::size_t length = shown_width(phrase);
-        if (line_has_phrase && used + length > width) {
+        if (used > indent && used + shown_width(phrase) > width) {
+            while (out.ends_with(' '))
+                out.pop_back();
             out += '\n';
             out.append(indent, ' ');
-            out += phrase.substr(1);
-            used = indent + length - 1;
-        } else {
-            out += phrase;
-            used += length;
+            used = indent;
+            if (phrase.starts_with(' ')) phrase.remove_prefix(1);
         }
-        line_has_phrase = true;
+        out += phrase;
+        used += shown_width(phrase);
     }
     out += '\n';
     return out;

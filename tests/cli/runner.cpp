@@ -134,38 +134,6 @@ bool has_sign(const std::string& folder, const std::string& sign) {
 
 }  // namespace
 
-Folder::Folder() {
-    std::string pattern =
-        (std::filesystem::temp_directory_path() / "rainledger-test-XXXXXX").string();
-    require(::mkdtemp(pattern.data()) != nullptr, "cannot make a folder");
-    path_ = pattern;
-}
-
-Folder::~Folder() {
-    std::error_code ignored;
-    std::filesystem::remove_all(path_, ignored);
-}
-
-void Folder::write(const std::string& name, const std::string& text) const {
-    std::ofstream(path(name), std::ios::binary) << text;
-}
-
-std::string Folder::read(const std::string& name) const {
-    std::ifstream file(path(name), std::ios::binary);
-    require(file.is_open(), "no such file in the folder");
-    std::ostringstream text;
-    text << file.rdbuf();
-    return text.str();
-}
-
-std::vector<std::string> Folder::names() const {
-    std::vector<std::string> names;
-    for (const auto& entry : std::filesystem::directory_iterator(path_))
-        names.push_back(entry.path().filename().string());
-    std::sort(names.begin(), names.end());
-    return names;
-}
-
 Outcome run(const Setting& setting, const std::vector<std::string>& words) {
     const Streams streams(setting);
     return finish(setting, streams, start(setting, streams, words));

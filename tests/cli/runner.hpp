@@ -6,27 +6,12 @@
 
 #include <sys/types.h>
 
+#include "folder.hpp"
+
 // Runs the built program as a user would and takes down what it said.
 namespace rainledger::cli_test {
 
-/// A fresh folder, removed with all that is in it.
-class Folder {
-public:
-    Folder();
-    Folder(const Folder&) = delete;
-    Folder& operator=(const Folder&) = delete;
-    ~Folder();
-
-    [[nodiscard]] const std::string& path() const { return path_; }
-    [[nodiscard]] std::string path(const std::string& name) const { return path_ + "/" + name; }
-    void write(const std::string& name, const std::string& text) const;
-    [[nodiscard]] std::string read(const std::string& name) const;
-    /// Names of what lies in it, sorted.
-    [[nodiscard]] std::vector<std::string> names() const;
-
-private:
-    std::string path_;
-};
+using testing::Folder;
 
 /// Where standard output goes.
 enum class Out {

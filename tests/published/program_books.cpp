@@ -13,41 +13,23 @@
 #include <nlohmann/json.hpp>
 #include <stdlib.h>
 
+#include "folder.hpp"
 #include "published/check_files.hpp"
 #include "rainledger/base/number.hpp"
 
 namespace rainledger::published {
 namespace {
 
-/// A folder of its own, removed with all that is in it.
-class Folder {
-public:
-    Folder() {
-        std::string pattern =
-            (std::filesystem::temp_directory_path() / "published-XXXXXX").string();
-        if (mkdtemp(pattern.data()) == nullptr) throw std::runtime_error("no temporary folder");
-        path_ = pattern;
-    }
-    Folder(const Folder&) = delete;
-    Folder& operator=(const Folder&) = delete;
-    ~Folder() {
-        std::error_code ignored;
-        std::filesystem::remove_all(path_, ignored);
-    }
-    [[nodiscard]] std::string file(const std::string& name) const { return path_ + "/" + name; }
-
-private:
-    std::string path_;
-};
+using testing::Folder;
 
 void run_program(const Folder& folder, const std::string& scenario) {
-    std::ofstream(folder.file("scenario.yaml")) << scenario;
+    std::ofstream(folder.path("scenario.yaml")) << scenario;
     const std::string command =
-        std::string("'" RAINLEDGER_PROGRAM "' losses '") + folder.file("scenario.yaml") +
-        "' --ledger '" + folder.file("ledger.csv") + "' --json '" + folder.file("all.json") +
-        "' > '" + folder.file("out") + "' 2> '" + folder.file("messages") + "'";
+        std::string("'" RAINLEDGER_PROGRAM "' losses '") + folder.path("scenario.yaml") +
+        "' --ledger '" + folder.path("ledger.csv") + "' --json '" + folder.path("all.json") +
+        "' > '" + folder.path("out") + "' 2> '" + folder.path("messages") + "'";
     if (std::system(command.c_str()) != 0)
-        throw std::runtime_error("the program fails: " + file_text(folder.file("messages")));
+        throw std::runtime_error("the program fails: " + file_text(folder.path("messages")));
 }
 
 double number_cell(const std::string& cell) {
@@ -127,8 +109,8 @@ StormBooks program_books(const StoredStorm& storm) {
     const Folder folder;
     run_program(folder, storm.scenario);
     StormBooks books;
-    read_ledger(books, file_text(folder.file("ledger.csv")));
-    read_json(books, file_text(folder.file("all.json")));
+    read_ledger(books, file_text(folder.path("ledger.csv")));
+    read_json(books, file_text(folder.path("all.json")));
     return books;
 }
 

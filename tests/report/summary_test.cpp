@@ -170,6 +170,17 @@ TEST_CASE("the summary says what was done to the storm") {
                         "  then 2 h 00 min of dry time (continue_for)\n"));
 }
 
+TEST_CASE("rain too coarse for the shortest windows says so") {
+    Scenario scenario = sample::verge_and_parking(
+        make_hyetograph({0.0, 10.0, 20.0, 50.0}, "min", {0.4, 12.5, 3.0}));
+    CHECK_THAT(summary_of(scenario),
+               Contains("  The heaviest rain is an average over its step of 10 min; over fewer "
+                        "minutes the flow\n  may have been higher.\n"));
+    scenario = sample::verge_and_parking(
+        make_hyetograph({0.0, 10.0, 15.0, 45.0}, "min", {0.4, 12.5, 3.0}));
+    CHECK_THAT(summary_of(scenario), !Contains("heaviest"));
+}
+
 TEST_CASE("several storms are told apart, the assumptions are said once") {
     Scenario scenario = plain();
     scenario.storms.push_back(scenario.storms[0]);

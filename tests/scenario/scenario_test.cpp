@@ -1,12 +1,10 @@
 #include "rainledger/scenario/scenario.hpp"
 
-#include <filesystem>
-#include <fstream>
 #include <string>
-#include <system_error>
 #include <variant>
 #include <vector>
 
+#include "folder.hpp"
 #include "scenario/read_text.hpp"
 #include "test.hpp"
 
@@ -28,26 +26,7 @@ Storm storm_of(const std::string& storm) {
     return must_read(with_storm(storm)).storms.at(0);
 }
 
-/// A folder that is gone at the end of the test.
-class Folder {
-public:
-    Folder() : path_(std::filesystem::temp_directory_path() / "rainledger_scenario_test") {
-        std::filesystem::create_directories(path_);
-    }
-    Folder(const Folder&) = delete;
-    Folder& operator=(const Folder&) = delete;
-    ~Folder() {
-        std::error_code ignored;
-        std::filesystem::remove_all(path_, ignored);
-    }
-    std::string write(const std::string& name, const std::string& text) const {
-        std::ofstream(path_ / name) << text;
-        return (path_ / name).string();
-    }
-
-private:
-    std::filesystem::path path_;
-};
+using testing::Folder;
 
 }  // namespace
 
