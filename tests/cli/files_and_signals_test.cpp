@@ -10,16 +10,6 @@ namespace {
 
 using Names = std::vector<std::string>;
 
-struct Yard {
-    Folder folder;
-    Setting setting{folder.path()};
-
-    Yard() {
-        folder.write("yard.yaml", kYard);
-        folder.write("rain.csv", kRain);
-    }
-};
-
 const Names kInputs{"rain.csv", "yard.yaml"};
 
 }  // namespace

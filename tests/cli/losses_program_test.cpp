@@ -9,17 +9,6 @@ namespace {
 
 using Names = std::vector<std::string>;
 
-/// A folder with the yard's scenario and its rain.
-struct Yard {
-    Folder folder;
-    Setting setting{folder.path()};
-
-    Yard() {
-        folder.write("yard.yaml", kYard);
-        folder.write("rain.csv", kRain);
-    }
-};
-
 }  // namespace
 
 TEST_CASE("losses writes the summary, in the units asked for") {

@@ -2,6 +2,8 @@
 
 #include <string>
 
+#include "cli/runner.hpp"
+
 namespace rainledger::cli_test {
 
 /// A scenario that raises no warning: its rain in a file beside it, an impervious yard.
@@ -24,5 +26,16 @@ inline const std::string kWarning =
     "  yard:\n"
     "    area: 1000 m2\n"
     "    losses: {curve_number: {number: 90}}\n";
+
+/// A folder with the yard's scenario and its rain.
+struct Yard {
+    Folder folder;
+    Setting setting{folder.path()};
+
+    Yard() {
+        folder.write("yard.yaml", kYard);
+        folder.write("rain.csv", kRain);
+    }
+};
 
 }  // namespace rainledger::cli_test
