@@ -26,7 +26,7 @@ std::optional<RainKind> kind_called(std::string_view name) {
 /// Two names of one unit ("h" and "hr", say).
 bool same_unit(const std::string& a, const std::string& b) {
     if (a == b) return true;
-    for (const Dimension dimension : {Dimension::depth, Dimension::rate}) {
+    for (const Dimension dimension : {Dimension::depth, Dimension::rate, Dimension::time}) {
         const auto first = find_unit(a, dimension);
         const auto second = find_unit(b, dimension);
         if (first && second) return first->to_canonical(1.0) == second->to_canonical(1.0);
@@ -62,7 +62,14 @@ private:
     void take_named_rain();
     void take_known_rain();
     void take_rain(const HeaderCell& cell, RainKind kind);
-    [[nodiscard]] bool may_override(const HeaderCell& cell);
+    /// A unit and a column as the scenario states them, with the keys it uses.
+    struct Stated {
+        const std::optional<std::string>& unit;
+        const std::optional<std::string>& column;
+        std::string_view unit_key;
+        std::string_view column_key;
+    };
+    [[nodiscard]] bool may_override(const HeaderCell& cell, const Stated& stated);
     void refuse_rain_unit(const HeaderCell& cell, const std::string& unit, Dimension dimension);
 
     [[nodiscard]] Found called(std::string_view name) const;
@@ -201,6 +208,7 @@ void HeaderReader::take_time(const HeaderCell& cell, StampMeaning meaning) {
 }
 
 void HeaderReader::find_time_unit(const HeaderCell& cell) {
+    if (!may_override(cell, {layout_.time_unit, layout_.time_column, "time_unit", "time"})) return;
     const auto& unit = layout_.time_unit ? layout_.time_unit : cell.unit;
     const std::string name = unit.value_or("");
     if (time_cell_ != nullptr && name != columns_.time_unit) {
@@ -291,7 +299,7 @@ void HeaderReader::take_known_rain() {
 void HeaderReader::take_rain(const HeaderCell& cell, RainKind kind) {
     columns_.rain = cell.column;
     columns_.kind = kind;
-    if (!may_override(cell)) return;
+    if (!may_override(cell, {layout_.rain_unit, layout_.rain_column, "unit", "rain"})) return;
     const auto& unit = layout_.rain_unit ? layout_.rain_unit : cell.unit;
     const bool is_rate = kind == RainKind::intensity;
     const Dimension dimension = is_rate ? Dimension::rate : Dimension::depth;
@@ -311,14 +319,16 @@ void HeaderReader::take_rain(const HeaderCell& cell, RainKind kind) {
 }
 
 /// A unit for a column that the scenario does not name may fill in a bracket, not replace one.
-bool HeaderReader::may_override(const HeaderCell& cell) {
-    if (!layout_.rain_unit || layout_.rain_column || !cell.unit) return true;
-    if (same_unit(*layout_.rain_unit, *cell.unit)) return true;
+/// `unit` and `column` are what the scenario states under `unit_key` and `column_key`.
+bool HeaderReader::may_override(const HeaderCell& cell, const Stated& stated) {
+    if (!stated.unit || stated.column || !cell.unit) return true;
+    if (same_unit(*stated.unit, *cell.unit)) return true;
+    const std::string unit_key(stated.unit_key);
     error(cell.column.place,
           "column " + shown(cell.column.title) + " is in " + *cell.unit +
-              ", but the scenario gives unit: " + *layout_.rain_unit,
-          "leave out unit:, or name the column too, rain: '" + cell.column.title +
-              "', to replace its bracket");
+              ", but the scenario gives " + unit_key + ": " + *stated.unit,
+          "leave out " + unit_key + ":, or name the column too, " + std::string(stated.column_key) +
+              ": '" + cell.column.title + "', to replace its bracket");
     return false;
 }
 

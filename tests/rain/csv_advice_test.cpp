@@ -144,6 +144,16 @@ TEST_CASE("a unit for a column that is not named may not replace its bracket") {
               ^
     leave out unit:, or name the column too, rain: 'depth [mm]', to replace its bracket
 )");
+    layout = {};
+    layout.time_unit = "hr";
+    CHECK(problems_in("end [h],depth [mm]\n5,1\n", layout).empty());  // one unit by two names
+    layout.time_unit = "h";
+    CHECK(problems_in("end [min],depth [mm]\n5,1\n", layout) ==
+          R"(gauge.csv:1:1: error: column 'end [min]' is in min, but the scenario gives time_unit: h
+    end [min],depth [mm]
+    ^
+    leave out time_unit:, or name the column too, time: 'end [min]', to replace its bracket
+)");
 }
 
 }  // namespace rainledger
