@@ -116,9 +116,10 @@ std::string ledger_text(const LossesOptions& options, const Scenario& scenario,
     for (std::size_t i = 0; i < scenario.storms.size(); ++i) {
         const Storm& storm = scenario.storms[i];
         if (options.every_h)
-            append_ledger_rows(out, scenario.site, storm,
-                               keep_ledger_every(scenario.site, storm.rain, *options.every_h),
-                               with_start);
+            append_ledger_rows(
+                out, scenario.site, storm,
+                report_every(scenario.site, storm.rain, *options.every_h, results.ledgers[i]),
+                with_start);
         else
             append_ledger_rows(out, scenario.site, storm, results.ledgers[i], with_start);
     }

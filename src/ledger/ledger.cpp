@@ -20,13 +20,6 @@ constexpr double kRunOnTolerance = 2.0e-7;  // mm
 // Beyond this the accounts below may stand further than 1e-6 mm from the true ones, which is told.
 constexpr double kCoarseRunOn = 5.0e-7;  // mm
 
-/// True if the surface's excess can vary while its supply does not.
-bool excess_varies(const Surface& surface) {
-    return !std::holds_alternative<Impervious>(surface.losses) &&
-           !std::holds_alternative<ConstantRate>(surface.losses) &&
-           !std::holds_alternative<PhiIndex>(surface.losses);
-}
-
 /// Surfaces in an order in which every giver comes before its receivers.
 std::vector<std::size_t> givers_first(const Site& site) {
     std::vector<std::size_t> waiting(site.surfaces.size(), 0);
@@ -70,9 +63,8 @@ private:
         const Surface& surface = site_.surfaces[index];
         const RateSeries arriving = std::move(run_on_[index]);
         const bool gives = !surface.runs_onto.empty();
-        const double allowed_mm = gives && excess_varies(surface)
-                                      ? kRunOnTolerance / largest_hand_over(site_, surface)
-                                      : kNever;
+        const double allowed_mm =
+            gives ? kRunOnTolerance / largest_hand_over(site_, surface) : kNever;
         const MarchInput input{arriving.empty() ? nullptr : &arriving, allowed_mm};
         const ConstantRate matched = matched_phi(index, input);
         RateSeries outflow;
@@ -111,16 +103,6 @@ private:
     SiteLedger out_;
 };
 
-void add_row(LedgerRow& sum, const LedgerRow& part) {
-    sum.accounts.rain_mm += part.accounts.rain_mm;
-    sum.accounts.run_on_mm += part.accounts.run_on_mm;
-    sum.accounts.initial_loss_mm += part.accounts.initial_loss_mm;
-    sum.accounts.infiltrated_mm += part.accounts.infiltrated_mm;
-    sum.accounts.ponded_mm = part.accounts.ponded_mm;
-    sum.accounts.excess_mm += part.accounts.excess_mm;
-    sum.capacity_mm_per_h = part.capacity_mm_per_h;
-}
-
 /// Rows of the finer steps added up to reporting steps.
 std::vector<LedgerRow> reported_rows(const std::vector<LedgerRow>& fine,
                                      const std::vector<double>& fine_edges_h,
@@ -131,7 +113,8 @@ std::vector<LedgerRow> reported_rows(const std::vector<LedgerRow>& fine,
         const double middle = 0.5 * (fine_edges_h[step] + fine_edges_h[step + 1]);
         while (row + 1 < out.size() && middle > edges_h[row + 1])
             ++row;
-        add_row(out[row], fine[step]);
+        add_step(out[row].accounts, fine[step].accounts);
+        out[row].capacity_mm_per_h = fine[step].capacity_mm_per_h;
     }
     return out;
 }
@@ -150,8 +133,10 @@ SiteLedger keep_ledger(const Site& site, const Hyetograph& rain) {
     return ledger;
 }
 
-ReportedLedger keep_ledger_every(const Site& site, const Hyetograph& rain, double every_h) {
+ReportedLedger report_every(const Site& site, const Hyetograph& rain, double every_h,
+                            SiteLedger marched) {
     ReportedLedger out;
+    out.ledger = std::move(marched);
     const double start = rain.edges_h.front();
     const double end = rain.edges_h.back();
     // A report edge within a rounding of the end is the end.
@@ -164,7 +149,6 @@ ReportedLedger keep_ledger_every(const Site& site, const Hyetograph& rain, doubl
 
     const CutHyetograph cut = cut_hyetograph(rain, out.edges_h);
     const SiteLedger fine = keep_ledger(site, cut.rain);
-    out.ledger = keep_ledger(site, rain);
     const auto report = [&](std::vector<LedgerRow>& rows, const std::vector<LedgerRow>& finer) {
         rows = reported_rows(finer, cut.rain.edges_h, out.edges_h);
     };

@@ -20,19 +20,21 @@ inline constexpr int kMostHalvings = 14;
 /// Halvings in all, where the rate jumps: down to the last bits of an instant.
 inline constexpr int kMostJumpHalvings = 48;
 
-/// Longest part of a rate that varies, h.
+/// Longest part of a rate that varies, h: an event of the receiver falls within the right part, so
+/// its instant is as good as the part is short.
 inline constexpr double kLongestPart = 1.0 / 3600.0;
 
-/// Cuts [0, length_h] into parts with |r1 - r0| h/4 <= allowed_mm, `rate_after(h)` giving the rate
-/// (mm/h, monotone) at time h from the start of the next part, and calls `take(h)` for each in
-/// turn; taking a part moves the start. Returns the largest |r1 - r0| h/4 of any part: above
-/// `allowed_mm` only where the halvings were used up.
+/// Cuts [0, length_h] into parts with |r1 - r0| h/4 <= allowed_mm, a second at most where that is
+/// not a millionth of it. `rate_after(h)` gives the rate (mm/h, monotone) at time h from the start
+/// of the next part; `take(h)` is called for each part in turn and moves that start. Returns the
+/// largest |r1 - r0| h/4 of any part: above `allowed_mm` only where the halvings were used up.
 template <class RateAfter, class Take>
 double for_each_part(double length_h, double allowed_mm, const RateAfter& rate_after,
                      const Take& take) {
     double coarsest = 0.0;
-    const auto halve = [&](const auto& self, double h, int halvings, double parent_change) -> void {
-        const double change = std::abs(rate_after(h) - rate_after(0.0));
+    const auto halve = [&](const auto& self, double h, double first_rate, double last_rate,
+                           int halvings, double parent_change) -> void {
+        const double change = std::abs(last_rate - first_rate);
         const double difference = 0.25 * change * h;
         // A jump stays whole in one half; a rate that varies throughout does not.
         const bool jumps = change > 0.9 * parent_change;
@@ -43,10 +45,11 @@ double for_each_part(double length_h, double allowed_mm, const RateAfter& rate_a
             take(h);
             return;
         }
-        self(self, 0.5 * h, halvings + 1, change);
-        self(self, 0.5 * h, halvings + 1, change);
+        const double middle_rate = rate_after(0.5 * h);
+        self(self, 0.5 * h, first_rate, middle_rate, halvings + 1, change);
+        self(self, 0.5 * h, middle_rate, last_rate, halvings + 1, change);
     };
-    halve(halve, length_h, 0, 0.0);
+    halve(halve, length_h, rate_after(0.0), rate_after(length_h), 0, 0.0);
     return coarsest;
 }
 

@@ -56,6 +56,16 @@ private:
     double ponded_mm_ = 0.0;
 };
 
+/// Adds a step's accounts to a plain sum.
+inline void add_step(Accounts& sum, const Accounts& step) {
+    sum.rain_mm += step.rain_mm;
+    sum.run_on_mm += step.run_on_mm;
+    sum.initial_loss_mm += step.initial_loss_mm;
+    sum.infiltrated_mm += step.infiltrated_mm;
+    sum.ponded_mm = step.ponded_mm;
+    sum.excess_mm += step.excess_mm;
+}
+
 /// By how much the books of a step, or of a whole storm, do not balance: left less right.
 inline double imbalance_mm(const Accounts& accounts, double ponded_before_mm) {
     return accounts.rain_mm + accounts.run_on_mm -
@@ -147,12 +157,7 @@ public:
     void outflow(double /*end_h*/, double /*rate*/) {}
     template <class Capacity>
     void step_ends(std::size_t /*step*/, const Accounts& accounts, const Capacity& /*capacity*/) {
-        total_.rain_mm += accounts.rain_mm;
-        total_.run_on_mm += accounts.run_on_mm;
-        total_.initial_loss_mm += accounts.initial_loss_mm;
-        total_.infiltrated_mm += accounts.infiltrated_mm;
-        total_.ponded_mm = accounts.ponded_mm;
-        total_.excess_mm += accounts.excess_mm;
+        add_step(total_, accounts);
     }
     [[nodiscard]] Accounts total() const { return total_; }
 

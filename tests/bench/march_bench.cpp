@@ -15,7 +15,7 @@ namespace {
 
 constexpr int kSteps = 288;
 
-/// A day with one peak, in which a soil of 10.9 mm/h is ponded in about one step of seven.
+/// A day with one peak: the Green-Ampt soil below is ponded for 9 % of it, Horton's for 12.5 %.
 Hyetograph storm_with_a_peak() {
     std::vector<double> edges{0.0};
     std::vector<double> depths;

@@ -111,7 +111,7 @@ TEST_CASE("a ledger reported at other steps is exact, and totals and instants st
         const Site site{{surface}};
         const SiteLedger plain = keep_ledger(site, rain);
         for (const double every_h : {1.0 / 60.0, 0.3, 5.0}) {
-            const ReportedLedger reported = keep_ledger_every(site, rain, every_h);
+            const ReportedLedger reported = report_every(site, rain, every_h, plain);
             REQUIRE(reported.edges_h.size() == reported.ledger.site.rows.size() + 1);
             CHECK(reported.edges_h.back() == rain.edges_h.back());
             double rainfall = 0.0;

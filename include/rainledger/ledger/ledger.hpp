@@ -103,14 +103,17 @@ struct SiteLedger {
 /// Marches a storm over the site and books it. The site and the storm are valid.
 [[nodiscard]] SiteLedger keep_ledger(const Site& site, const Hyetograph& rain);
 
-/// The same ledger reported at steps of `every_h` > 0 from the first step's start, the last one
-/// shorter; the march is cut at their edges as well, so finer reports are exact.
+/// The rows of a ledger at steps of another length.
 struct ReportedLedger {
     std::vector<double> edges_h;  ///< rows + 1
-    SiteLedger ledger;            ///< rows per reporting step; totals and figures as marched
+    SiteLedger ledger;            ///< rows per reporting step; all else as marched
 };
-[[nodiscard]] ReportedLedger keep_ledger_every(const Site& site, const Hyetograph& rain,
-                                               double every_h);
+
+/// The ledger `marched` (keep_ledger's of the same site and storm) with its rows reported at steps
+/// of `every_h` > 0 from the first step's start, the last one shorter. The rows come from a march
+/// that is cut at those steps' edges as well, so finer reports are exact.
+[[nodiscard]] ReportedLedger report_every(const Site& site, const Hyetograph& rain, double every_h,
+                                          SiteLedger marched);
 
 /// Totals of one surface, marched without run-on and without a stored series (nothing is allocated
 /// per step).
