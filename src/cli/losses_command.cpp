@@ -126,16 +126,15 @@ std::string ledger_text(const LossesOptions& options, const Scenario& scenario,
     return out;
 }
 
-/// Writes every file, then standard output, then gives the files their names.
+/// Writes every file in the order of options.output_paths(), then standard output, then gives the
+/// files their names.
 bool write_all(const LossesOptions& options, const Scenario& scenario, const Results& results,
                OutputFiles& files, std::string& problem) {
-    if (options.ledger &&
-        !files.write(*options.ledger, ledger_text(options, scenario, results), problem))
+    if (options.ledger && !files.write_next(ledger_text(options, scenario, results), problem))
         return false;
     std::string json;
     if (options.json) json = results_json(scenario, results.ledgers, results.warnings);
-    if (options.json && !options.json_on_stdout() && !files.write(*options.json, json, problem))
-        return false;
+    if (options.json && !options.json_on_stdout() && !files.write_next(json, problem)) return false;
     const std::string shown = options.json_on_stdout()
                                   ? std::move(json)
                                   : summary(scenario, results.ledgers, {options.units});

@@ -113,14 +113,11 @@ bool OutputFiles::open(const std::string& path, std::string& problem) {
     return true;
 }
 
-bool OutputFiles::write(std::string_view path, std::string_view content, std::string& problem) {
-    for (WholeFile& file : files_) {
-        if (file.path() != path) continue;
-        if (file.write(content, problem)) continue;
-        problem.insert(0, file.path() + ": ");
-        return false;
-    }
-    return true;
+bool OutputFiles::write_next(std::string_view content, std::string& problem) {
+    WholeFile& file = files_[written_++];
+    if (file.write(content, problem)) return true;
+    problem.insert(0, file.path() + ": ");
+    return false;
 }
 
 bool OutputFiles::commit(std::string& problem) {

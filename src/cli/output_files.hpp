@@ -1,5 +1,6 @@
 #pragma once
 
+#include <cstddef>
 #include <string>
 #include <string_view>
 #include <vector>
@@ -24,13 +25,15 @@ public:
 
     /// Opens a file. False with `problem` ("PATH: no such file or directory") on failure.
     [[nodiscard]] bool open(const std::string& path, std::string& problem);
-    /// Writes the file opened as `path`.
-    [[nodiscard]] bool write(std::string_view path, std::string_view content, std::string& problem);
+    /// Writes the first file, in the order of opening, that is not written yet. Two of them may be
+    /// one device, so their names do not tell them apart.
+    [[nodiscard]] bool write_next(std::string_view content, std::string& problem);
     /// Gives every file its name.
     [[nodiscard]] bool commit(std::string& problem);
 
 private:
     std::vector<WholeFile> files_;
+    std::size_t written_ = 0;
 };
 
 }  // namespace rainledger

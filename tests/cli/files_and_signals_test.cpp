@@ -1,3 +1,5 @@
+#include <cstdlib>
+
 #include <signal.h>
 #include <sys/stat.h>
 
@@ -86,6 +88,23 @@ TEST_CASE("a standard output closed from the start loses the results, which is t
     CHECK(outcome.status == 4);
     CHECK(outcome.err == "rainledger: cannot write standard output: Bad file descriptor\n");
     CHECK(yard.folder.names() == kInputs);
+}
+
+TEST_CASE("two outputs into one stream are written once each, one after the other") {
+    const Yard yard;
+    // A pipe: the runner's own capture is a file, which two outputs may not share.
+    const std::string command = "cd '" + yard.folder.path() +
+                                "' && { '" RAINLEDGER_PROGRAM
+                                "' losses yard.yaml --quiet --ledger /dev/stderr --json /dev/stderr"
+                                " 2>&1 >/dev/null; } | cat >both";
+    REQUIRE(std::system(command.c_str()) == 0);
+    const std::string both = yard.folder.read("both");
+    const std::string header = "storm,drains_to,surface,";
+    const std::size_t json = both.find("\n{\n");
+    CHECK(both.starts_with(header));
+    CHECK(both.find(header, 1) == std::string::npos);
+    REQUIRE(json != std::string::npos);
+    CHECK(both.find("\n{\n", json + 1) == std::string::npos);
 }
 
 TEST_CASE("an interrupt removes the temporary files and ends with 130") {
