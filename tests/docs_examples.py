@@ -40,13 +40,15 @@ def same_line(shown, real):
 def chunks(shown):
     """Runs of lines that must stand together: [(may lines be left out before it, lines)]."""
     found, skipped, lines = [], False, []
-    for line in [*shown, "..."]:
+    for line in shown:
         if line.strip() != "...":
             lines.append(line)
             continue
         if lines:
             found.append((skipped, lines))
         skipped, lines = True, []
+    if lines:
+        found.append((skipped, lines))
     return found
 
 
@@ -69,6 +71,8 @@ def first_line_missing(shown, real):
                 break
         else:
             return lines[most]
+    if shown[-1].strip() != "..." and at < len(real):
+        return f"(the end; the output goes on: {real[at]})"
     return None
 
 

@@ -1,4 +1,4 @@
-# Sourced by the two set-up scripts: installs Debian packages that are missing and builds.
+# Sourced by the two set-up scripts and by .ci/run: installs Debian packages that are missing and builds.
 
 root=$(cd "$(dirname "${BASH_SOURCE[0]}")/../.." && pwd)
 

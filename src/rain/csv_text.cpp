@@ -4,6 +4,8 @@
 #include <cstring>
 #include <utility>
 
+#include "rainledger/base/cut.hpp"
+
 namespace rainledger {
 namespace {
 
@@ -165,8 +167,7 @@ std::string lower(std::string_view text) {
 
 std::string shown(std::string_view text) {
     constexpr std::size_t kMostShown = 40;
-    const bool cut = text.size() > kMostShown;
-    return "'" + std::string(text.substr(0, kMostShown)) + (cut ? "...'" : "'");
+    return in_quotes(text, kMostShown);
 }
 
 void report_form(CsvProblems& problems, const CsvLine& line, const CsvCell& cell) {

@@ -7,6 +7,8 @@
 #include <date/date.h>
 #include <date/tz.h>
 
+#include "rainledger/base/cut.hpp"
+
 namespace rainledger {
 namespace {
 
@@ -103,8 +105,7 @@ ParsedStamp refused(std::string problem, std::string hint = {}) {
 
 std::string quoted(std::string_view text) {
     constexpr std::size_t kMostShown = 40;
-    const bool cut = text.size() > kMostShown;
-    return "'" + std::string(text.substr(0, kMostShown)) + (cut ? "...'" : "'");
+    return in_quotes(text, kMostShown);
 }
 
 ParsedStamp impossible_date(std::string_view text, const Fields& f) {

@@ -11,7 +11,7 @@
 namespace rainledger {
 namespace {
 
-constexpr std::size_t kMostListed = 20;         // errors shown of one list; the rest are counted
+constexpr std::size_t kMostListed = 20;         // errors told of one list; the rest is not read
 constexpr double kShortestStepH = 1.0 / 3.6e6;  // 1 ms; intensities stay finite
 
 constexpr const char* kStepsExample =

@@ -21,6 +21,8 @@ TEST_CASE("the antecedent table falls from row to row and holds I <= II <= III")
     }
 }
 
+// Rows of NEH Part 630, chapter 10, table 10-1: 80 as reprinted in Beven, Rainfall-Runoff
+// Modelling: The Primer, table B6.3.2; 81, 25 and 5 from memory.
 TEST_CASE("numbers between rows are interpolated") {
     CHECK(antecedent_dry(80.0) == 63.0);
     CHECK(antecedent_wet(80.0) == 91.0);

@@ -19,8 +19,8 @@ namespace rainledger {
 }
 
 /// The same in quotes.
-[[nodiscard]] inline std::string in_quotes(std::string_view text) {
-    return "'" + cut(text) + "'";
+[[nodiscard]] inline std::string in_quotes(std::string_view text, std::size_t most = 60) {
+    return "'" + cut(text, most) + "'";
 }
 
 }  // namespace rainledger
