@@ -1,9 +1,6 @@
 #include "cli/losses_options.hpp"
 
-#include <filesystem>
 #include <string_view>
-#include <system_error>
-#include <utility>
 
 #include "cli/same_file.hpp"
 #include "rainledger/base/quantity.hpp"

@@ -1,6 +1,5 @@
 #include "rain/csv_steps.hpp"
 
-#include <algorithm>
 #include <cmath>
 #include <limits>
 #include <utility>

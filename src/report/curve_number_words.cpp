@@ -34,8 +34,7 @@ std::string_view condition_name(AntecedentCondition condition) {
     return "";
 }
 
-std::string conversion_source(const CurveNumber& given) {
-    const CurveNumberInUse use = number_in_use(given);
+std::string conversion_source(const CurveNumberInUse& use) {
     std::string out;
     if (use.condition_converted) out += kAntecedentSource;
     if (use.condition_converted && use.ratio_converted) out += "; ";

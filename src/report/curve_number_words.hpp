@@ -22,6 +22,6 @@ struct CurveNumberInUse {
 [[nodiscard]] std::string_view condition_name(AntecedentCondition condition);
 
 /// The published sources of the conversions that were made, "; " between two; empty without one.
-[[nodiscard]] std::string conversion_source(const CurveNumber& given);
+[[nodiscard]] std::string conversion_source(const CurveNumberInUse& use);
 
 }  // namespace rainledger

@@ -66,7 +66,7 @@ struct ParameterWriter {
         json.member("retention_mm", use.curve.retention_mm);
         json.member("initial_abstraction_mm", use.curve.initial_abstraction_mm);
         json.key("source");
-        const std::string source = conversion_source(given);
+        const std::string source = conversion_source(use);
         if (source.empty())
             json.null();
         else

@@ -2,7 +2,6 @@
 
 #include <cmath>
 #include <cstddef>
-#include <cstdint>
 #include <utility>
 
 #include "rainledger/base/number.hpp"

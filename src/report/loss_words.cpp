@@ -80,7 +80,7 @@ struct AssumptionWords {
         }
         if (use.ratio_converted)
             out += "; " + four_figures(use.number_used) + " from ratio 0.2 to 0.05";
-        const std::string source = conversion_source(given);
+        const std::string source = conversion_source(use);
         if (!source.empty()) out += " (" + source + ")";
         return out + ", initial abstraction " + four_figures(given.initial_abstraction_ratio) +
                " of retention " + display.depth_with_unit(use.curve.retention_mm) + ", that is " +

@@ -1,7 +1,6 @@
 #include <algorithm>
 #include <cstddef>
 #include <string_view>
-#include <utility>
 #include <vector>
 
 #include <fmt/core.h>

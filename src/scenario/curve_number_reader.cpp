@@ -1,4 +1,3 @@
-#include <cmath>
 #include <string>
 
 #include "scenario/losses_reader.hpp"

@@ -23,18 +23,17 @@ std::string of_storm(const Storm& storm) {
     return storm.name == "storm" ? "" : " of storm " + in_quotes(storm.name);
 }
 
-void warn_high_rain(const ReadStorm& read, Diagnostics& diagnostics) {
-    const double peak = peak_intensity_mm_per_h(read.storm.rain);
-    const double depth = total_depth_mm(read.storm.rain);
+void warn_high_rain(const Storm& read, Diagnostics& diagnostics) {
+    const double peak = peak_intensity_mm_per_h(read.rain);
+    const double depth = total_depth_mm(read.rain);
     if (peak > kHighIntensity)
         diagnostics.warning(read.place,
-                            "the largest intensity" + of_storm(read.storm) + " is " + brief(peak) +
+                            "the largest intensity" + of_storm(read) + " is " + brief(peak) +
                                 " mm/h, above 2000 mm/h",
                             "check the unit of the rain and the length of its steps");
     if (depth > kHighDepthMm)
         diagnostics.warning(
-            read.place,
-            "the depth" + of_storm(read.storm) + " is " + brief(depth) + " mm, above 2000 mm",
+            read.place, "the depth" + of_storm(read) + " is " + brief(depth) + " mm, above 2000 mm",
             "check the unit of the rain, and that it is not cumulative");
 }
 
@@ -54,34 +53,34 @@ bool starts_with_its_burst(const Hyetograph& rain) {
     return wet > 1 && rain.intensity_mm_per_h(step) >= kBurstShare * peak;
 }
 
-void warn_burst(const ReadStorm& read, const std::vector<ReadSurface>& surfaces,
+void warn_burst(const Storm& read, const std::vector<ReadSurface>& surfaces,
                 Diagnostics& diagnostics) {
-    if (!starts_with_its_burst(read.storm.rain)) return;
+    if (!starts_with_its_burst(read.rain)) return;
     const bool lossy = std::ranges::any_of(
         surfaces, [](const ReadSurface& each) { return has_initial_losses(each.surface); });
     if (!lossy) return;
     diagnostics.warning(read.place,
-                        "a burst without the rain before it: the first wet step" +
-                            of_storm(read.storm) + " has half the peak intensity or more",
+                        "a burst without the rain before it: the first wet step" + of_storm(read) +
+                            " has half the peak intensity or more",
                         "full initial losses meet the burst; give the whole storm, or start with "
                         "smaller losses");
 }
 
 /// The storms shorter than the curve number's own time: "2 h" or "'a' (2 h), 'b' (1 h)".
-std::string short_storms(const std::vector<ReadStorm>& storms) {
+std::string short_storms(const std::vector<Storm>& storms) {
     std::string out;
-    for (const ReadStorm& read : storms) {
-        const double hours = own_duration_h(read.storm.rain);
+    for (const Storm& read : storms) {
+        const double hours = own_duration_h(read.rain);
         if (hours >= kShortStormH) continue;
         const std::string text = brief_time(hours);
-        if (read.storm.name == "storm") return text;
-        out += (out.empty() ? "" : ", ") + in_quotes(read.storm.name) + " (" + text + ")";
+        if (read.name == "storm") return text;
+        out += (out.empty() ? "" : ", ") + in_quotes(read.name) + " (" + text + ")";
     }
     return out;
 }
 
-void warn_short_storms(const std::vector<ReadStorm>& storms,
-                       const std::vector<ReadSurface>& surfaces, Diagnostics& diagnostics) {
+void warn_short_storms(const std::vector<Storm>& storms, const std::vector<ReadSurface>& surfaces,
+                       Diagnostics& diagnostics) {
     const std::string names = short_storms(storms);
     if (names.empty()) return;
     for (const ReadSurface& read : surfaces)
@@ -113,9 +112,9 @@ void warn_run_on(const std::vector<ReadSurface>& surfaces, Diagnostics& diagnost
 
 }  // namespace
 
-void warn_about_scenario(const std::vector<ReadStorm>& storms,
-                         const std::vector<ReadSurface>& surfaces, Diagnostics& diagnostics) {
-    for (const ReadStorm& read : storms) {
+void warn_about_scenario(const std::vector<Storm>& storms, const std::vector<ReadSurface>& surfaces,
+                         Diagnostics& diagnostics) {
+    for (const Storm& read : storms) {
         warn_high_rain(read, diagnostics);
         warn_burst(read, surfaces, diagnostics);
     }

@@ -10,7 +10,7 @@
 namespace rainledger {
 
 /// Adds the warnings to `diagnostics`. Storms and surfaces are valid.
-void warn_about_scenario(const std::vector<ReadStorm>& storms,
-                         const std::vector<ReadSurface>& surfaces, Diagnostics& diagnostics);
+void warn_about_scenario(const std::vector<Storm>& storms, const std::vector<ReadSurface>& surfaces,
+                         Diagnostics& diagnostics);
 
 }  // namespace rainledger

@@ -29,12 +29,10 @@ std::string read_title(const ClosedMap& map) {
     return title.value_or(std::filesystem::path(map.reading().name()).filename().string());
 }
 
-Scenario assemble(std::string title, std::vector<ReadStorm> storms,
-                  std::vector<ReadSurface> surfaces) {
+Scenario assemble(std::string title, std::vector<Storm> storms, std::vector<ReadSurface> surfaces) {
     Scenario scenario;
     scenario.title = std::move(title);
-    for (ReadStorm& read : storms)
-        scenario.storms.push_back(std::move(read.storm));
+    scenario.storms = std::move(storms);
     for (ReadSurface& read : surfaces) {
         scenario.site.surfaces.push_back(std::move(read.surface));
         scenario.places.push_back(std::move(read.places));
@@ -58,7 +56,7 @@ std::optional<Scenario> read_scenario_parts(const std::string& name, std::string
         ClosedMap::read(reading, root, "the scenario", kScenarioKeys, kScenarioExample);
     if (!map) return std::nullopt;
     std::string title = read_title(*map);
-    std::vector<ReadStorm> storms = read_storms(*map);
+    std::vector<Storm> storms = read_storms(*map);
     std::vector<ReadSurface> surfaces = read_surfaces(*map);
     if (diagnostics.has_errors()) return std::nullopt;
     warn_about_scenario(storms, surfaces, diagnostics);

@@ -57,20 +57,19 @@ std::optional<Hyetograph> read_rain(const ClosedMap& map, Storm& storm) {
     return std::nullopt;
 }
 
-ReadStorm read_storm(const Reading& reading, const Entry& entry, std::string name) {
-    ReadStorm read;
+Storm read_storm(const Reading& reading, const Entry& entry, std::string name) {
+    Storm read;
     read.place = reading.at(entry.key_mark);
-    read.storm.place = read.place;
     const std::string what = name == "storm" ? "the storm" : "storm " + in_quotes(name);
-    read.storm.name = std::move(name);
+    read.name = std::move(name);
     const auto map = ClosedMap::read(reading, entry, what, kStormKeys, kStormExample);
     if (!map) return read;
-    read.storm.multiply_by = read_factor(*map);
-    if (auto rain = read_rain(*map, read.storm)) {
-        read.storm.rain = std::move(*rain);
-        multiply_depths(read.storm.rain, read.storm.multiply_by);
+    read.multiply_by = read_factor(*map);
+    if (auto rain = read_rain(*map, read)) {
+        read.rain = std::move(*rain);
+        multiply_depths(read.rain, read.multiply_by);
     }
-    continue_dry(*map, read.storm);
+    continue_dry(*map, read);
     return read;
 }
 
@@ -88,9 +87,9 @@ void check_storm_name(const Reading& reading, const Entry& entry) {
                       kHiddenHint);
 }
 
-std::vector<ReadStorm> read_named_storms(const Reading& reading, const Entry& entry) {
+std::vector<Storm> read_named_storms(const Reading& reading, const Entry& entry) {
     const std::string hint = "write 'storms:' with one name per storm, each with its own rain";
-    std::vector<ReadStorm> storms;
+    std::vector<Storm> storms;
     if (!is_map(reading, entry, "a map of storms", hint)) return storms;
     for (const Entry& named : entries_of(reading, entry, "storms")) {
         check_storm_name(reading, named);
@@ -102,17 +101,17 @@ std::vector<ReadStorm> read_named_storms(const Reading& reading, const Entry& en
 
 }  // namespace
 
-std::vector<ReadStorm> read_storms(const ClosedMap& scenario) {
+std::vector<Storm> read_storms(const ClosedMap& scenario) {
     const Reading& reading = scenario.reading();
     const Entry* one = scenario.find("storm");
     const Entry* several = scenario.find("storms");
     if (one != nullptr && several != nullptr)
         reading.error(several->key_mark, "a scenario takes one of 'storm' or 'storms', not both",
                       "move the single storm under 'storms:' with a name of its own");
-    std::vector<ReadStorm> storms;
+    std::vector<Storm> storms;
     if (one != nullptr) storms.push_back(read_storm(reading, *one, "storm"));
     if (several != nullptr)
-        for (ReadStorm& storm : read_named_storms(reading, *several))
+        for (Storm& storm : read_named_storms(reading, *several))
             storms.push_back(std::move(storm));
     if (one == nullptr && several == nullptr && !scenario.is_misnamed("storm") &&
         !scenario.is_misnamed("storms"))

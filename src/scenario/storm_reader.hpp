@@ -10,15 +10,9 @@
 // The storms of a scenario: hyetograph files and steps written out.
 namespace rainledger {
 
-/// A storm with the place of its name. Where something in it was wrong, and reported, its rain may
-/// be empty.
-struct ReadStorm {
-    Storm storm;
-    Place place;
-};
-
-/// The storms under `storm` or `storms` of the scenario's top level.
-[[nodiscard]] std::vector<ReadStorm> read_storms(const ClosedMap& scenario);
+/// The storms under `storm` or `storms` of the scenario's top level. Where something in one was
+/// wrong, and reported, its rain may be empty.
+[[nodiscard]] std::vector<Storm> read_storms(const ClosedMap& scenario);
 
 /// The rain of `steps: {...}`.
 [[nodiscard]] std::optional<Hyetograph> read_steps(const Reading& reading, const Entry& entry);

@@ -1,7 +1,6 @@
 #include "scenario/surface_reader.hpp"
 
 #include <algorithm>
-#include <utility>
 
 #include "rainledger/base/cut.hpp"
 #include "scenario/losses_reader.hpp"

@@ -2,19 +2,14 @@
 
 #include <array>
 #include <cstdlib>
-#include <filesystem>
-#include <fstream>
 #include <limits>
 #include <sstream>
 #include <stdexcept>
 #include <string>
-#include <system_error>
 
 #include <nlohmann/json.hpp>
-#include <stdlib.h>
 
 #include "folder.hpp"
-#include "published/check_files.hpp"
 #include "rainledger/base/number.hpp"
 
 namespace rainledger::published {
@@ -23,13 +18,13 @@ namespace {
 using testing::Folder;
 
 void run_program(const Folder& folder, const std::string& scenario) {
-    std::ofstream(folder.path("scenario.yaml")) << scenario;
+    folder.write("scenario.yaml", scenario);
     const std::string command =
         std::string("'" RAINLEDGER_PROGRAM "' losses '") + folder.path("scenario.yaml") +
         "' --ledger '" + folder.path("ledger.csv") + "' --json '" + folder.path("all.json") +
         "' > '" + folder.path("out") + "' 2> '" + folder.path("messages") + "'";
     if (std::system(command.c_str()) != 0)
-        throw std::runtime_error("the program fails: " + file_text(folder.path("messages")));
+        throw std::runtime_error("the program fails: " + folder.read("messages"));
 }
 
 double number_cell(const std::string& cell) {
@@ -109,8 +104,8 @@ StormBooks program_books(const StoredStorm& storm) {
     const Folder folder;
     run_program(folder, storm.scenario);
     StormBooks books;
-    read_ledger(books, file_text(folder.path("ledger.csv")));
-    read_json(books, file_text(folder.path("all.json")));
+    read_ledger(books, folder.read("ledger.csv"));
+    read_json(books, folder.read("all.json"));
     return books;
 }
 
