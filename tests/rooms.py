@@ -16,7 +16,8 @@ FLOORS = {
     "explore": 6,
     "review": 7,
     "report": 8,
-    "cli": 9,
+    "chart": 9,
+    "cli": 10,
 }
 MOST_LINES = 400
 

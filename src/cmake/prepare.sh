@@ -2,8 +2,8 @@
 
 root=$(cd "$(dirname "${BASH_SOURCE[0]}")/../.." && pwd)
 
-build_packages=(g++ cmake ninja-build libboost-dev libboost-program-options-dev libfmt-dev
-                libhowardhinnant-date-dev libyaml-cpp-dev nlohmann-json3-dev tzdata)
+build_packages=(g++ cmake ninja-build libboost-dev libboost-program-options-dev libeigen3-dev libfmt-dev
+                libhowardhinnant-date-dev libyaml-cpp-dev nlohmann-json3-dev tzdata gnuplot-nox)
 
 as_root() {
     if [ "$(id -u)" -eq 0 ]; then "$@"; else sudo "$@"; fi
