@@ -6,7 +6,7 @@
 #include <utility>
 #include <vector>
 
-#include "rainledger/base/suggest.hpp"
+#include "rain/csv_header_line.hpp"
 
 namespace rainledger {
 namespace {
@@ -37,21 +37,21 @@ bool same_unit(const std::string& a, const std::string& b) {
 class HeaderReader {
 public:
     HeaderReader(const CsvLine& line, const CsvLayout& layout, CsvProblems& problems)
-        : line_(line), layout_(layout), problems_(problems) {}
+        : header_(line, problems), layout_(layout), file_(problems.file()) {
+        columns_.line = line.number;
+        columns_.separator = header_.separator();
+        columns_.count = header_.cells().size();
+    }
 
     std::optional<CsvColumns> read() {
-        split();
-        if (!sound_) return std::nullopt;
+        if (!header_.is_sound()) return std::nullopt;
         find_time();
         find_rain();
-        if (!sound_) return std::nullopt;
+        if (!header_.is_sound()) return std::nullopt;
         return columns_;
     }
 
 private:
-    using Found = std::vector<const HeaderCell*>;
-
-    void split();
     void find_time();
     void take_named_time();
     void take_known_times();
@@ -72,80 +72,23 @@ private:
     [[nodiscard]] bool may_override(const HeaderCell& cell, const Stated& stated);
     void refuse_rain_unit(const HeaderCell& cell, const std::string& unit, Dimension dimension);
 
-    [[nodiscard]] Found called(std::string_view name) const;
-    [[nodiscard]] const HeaderCell* titled(const std::string& title);
-    [[nodiscard]] const HeaderCell* only(const Found& found);
     [[nodiscard]] bool lacks_all(std::span<const std::string_view> names) const;
     [[nodiscard]] std::string way_out(std::span<const std::string_view> known,
                                       std::string_view example) const;
 
     void error(std::size_t place, std::string message, std::string hint) {
-        sound_ = false;
-        problems_.error(line_.number, place, std::move(message), std::move(hint));
+        header_.error(place, std::move(message), std::move(hint));
     }
 
-    const CsvLine& line_;
+    HeaderLine header_;
     const CsvLayout& layout_;
-    CsvProblems& problems_;
-    bool sound_ = true;
-    std::vector<HeaderCell> cells_;
+    const std::string& file_;
     const HeaderCell* time_cell_ = nullptr;
     CsvColumns columns_;
 };
 
-void HeaderReader::split() {
-    columns_.line = line_.number;
-    columns_.separator = separator_of(line_.text);
-    const char* at = line_.text.data();
-    const char* const end = at + line_.text.size();
-    std::string buffer;
-    for (bool more = true; more; ++columns_.count) {
-        const CsvCell cell = cut_cell(at, end, columns_.separator, buffer);
-        if (cell.form != CellForm::sound) {
-            sound_ = false;
-            report_form(problems_, line_, cell);
-        }
-        cells_.push_back(
-            take_apart({columns_.count, line_.column_of(cell.begin), std::string(cell.text)}));
-        more = at != end;
-        if (more) ++at;
-    }
-}
-
-HeaderReader::Found HeaderReader::called(std::string_view name) const {
-    Found found;
-    for (const HeaderCell& cell : cells_)
-        if (cell.name == name) found.push_back(&cell);
-    return found;
-}
-
-const HeaderCell* HeaderReader::only(const Found& found) {
-    if (found.empty()) return nullptr;
-    if (found.size() > 1)
-        error(found[1]->column.place, "a second column is called " + shown(found[1]->column.title),
-              "rename one of the two");
-    return found.front();
-}
-
-/// The column with this whole title, else the one with this title before its bracket.
-const HeaderCell* HeaderReader::titled(const std::string& title) {
-    Found found;
-    for (const HeaderCell& cell : cells_)
-        if (cell.column.title == title) found.push_back(&cell);
-    if (found.empty()) found = called(lower(title));
-    if (found.empty()) {
-        std::vector<std::string_view> known;
-        for (const HeaderCell& cell : cells_)
-            known.push_back(cell.column.title);
-        const auto near = nearest(title, known);
-        const std::string guess = near ? "did you mean " + shown(*near) + "? " : "";
-        error(1, "there is no column " + shown(title), guess + column_titles(cells_));
-    }
-    return only(found);
-}
-
 bool HeaderReader::lacks_all(std::span<const std::string_view> names) const {
-    return std::ranges::all_of(names, [&](auto name) { return called(name).empty(); });
+    return std::ranges::none_of(names, [&](auto name) { return header_.has(name); });
 }
 
 std::string HeaderReader::way_out(std::span<const std::string_view> known,
@@ -153,7 +96,7 @@ std::string HeaderReader::way_out(std::span<const std::string_view> known,
     LackingColumns lacking;
     lacking.time = !layout_.time_column && lacks_all(kTimeNames);
     lacking.rain = !layout_.rain_column && lacks_all(kRainNames);
-    return column_advice(cells_, known, example, problems_.file(), lacking);
+    return column_advice(header_.cells(), known, example, file_, lacking);
 }
 
 void HeaderReader::find_time() {
@@ -165,7 +108,7 @@ void HeaderReader::find_time() {
 }
 
 void HeaderReader::take_named_time() {
-    const HeaderCell* const cell = titled(*layout_.time_column);
+    const HeaderCell* const cell = header_.titled(*layout_.time_column);
     if (cell == nullptr) return;
     if (cell->name == "start" || cell->name == "end")
         take_time(*cell, cell->name == "start" ? StampMeaning::start : StampMeaning::end);
@@ -179,9 +122,9 @@ void HeaderReader::take_named_time() {
 }
 
 void HeaderReader::take_known_times() {
-    const HeaderCell* const start = only(called("start"));
-    const HeaderCell* const end = only(called("end"));
-    const HeaderCell* const time = only(called("time"));
+    const HeaderCell* const start = header_.called("start");
+    const HeaderCell* const end = header_.called("end");
+    const HeaderCell* const time = header_.called("time");
     if (time != nullptr && (start != nullptr || end != nullptr)) {
         error(time->column.place, "there are two columns for one time",
               "state which to read in the scenario with time:");
@@ -254,7 +197,7 @@ void HeaderReader::find_rain() {
 }
 
 void HeaderReader::take_named_rain() {
-    const HeaderCell* const cell = titled(*layout_.rain_column);
+    const HeaderCell* const cell = header_.titled(*layout_.rain_column);
     if (cell == nullptr) return;
     const auto kind = layout_.kind ? layout_.kind : kind_called(cell->name);
     if (cell == time_cell_)
@@ -269,9 +212,9 @@ void HeaderReader::take_named_rain() {
 }
 
 void HeaderReader::take_known_rain() {
-    Found found;
+    std::vector<const HeaderCell*> found;
     for (const std::string_view name : kRainNames)
-        if (const HeaderCell* const cell = only(called(name))) found.push_back(cell);
+        if (const HeaderCell* const cell = header_.called(name)) found.push_back(cell);
     const auto wanted = [&](const HeaderCell* cell) {
         return layout_.kind && cell->name == kind_name(*layout_.kind);
     };

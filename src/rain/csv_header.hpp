@@ -3,6 +3,7 @@
 #include <cstddef>
 #include <optional>
 #include <string>
+#include <string_view>
 
 #include "rain/csv_header_cells.hpp"
 #include "rain/csv_text.hpp"
@@ -11,6 +12,10 @@
 
 // The header row of a hyetograph CSV: which columns hold what, in which units.
 namespace rainledger {
+
+/// Advice where a log of tips gives elapsed times.
+inline constexpr std::string_view kTipsNeedStamps =
+    "a tip log needs the instant of every tip, such as 2031-06-14T13:45:07Z";
 
 struct CsvColumns {
     std::size_t line = 1;
@@ -23,6 +28,8 @@ struct CsvColumns {
     std::string time_unit;  ///< of elapsed times
     Unit to_h;
 
+    bool of_tips = false;  ///< a log of tips: `rain` holds counts, `start` the instants
+    bool has_rain = true;  ///< false: no column of it is there or wanted
     CsvColumn rain;
     RainKind kind = RainKind::depth;
     std::string rain_unit;

@@ -34,7 +34,7 @@ CsvRowReader::CsvRowReader(const CsvColumns& columns, const CsvLayout& layout,
       decimal_mark_(columns.separator == ',' ? '.' : '\0') {
     if (columns.start) roles_[columns.start->index] = Role::start;
     if (columns.end) roles_[columns.end->index] = Role::end;
-    roles_[columns.rain.index] = Role::rain;
+    if (columns.has_rain) roles_[columns.rain.index] = Role::rain;
     if (layout.missing) missing_number_ = parse_number(*layout.missing);
 }
 
@@ -128,6 +128,10 @@ void CsvRowReader::take_rain(double value, const CsvLine& line, CsvRow& row) {
                             "the rain is missing here, marked " + shown(*layout_.missing),
                             "write the value, or take gaps as no rain with gaps: dry in the "
                             "scenario");
+    } else if (value < 0.0 && columns_.of_tips) {
+        problems_.error(line.number, row.rain_place, "a count of tips cannot be negative",
+                        "if " + shortest(value) + " marks a missing value, state missing: " +
+                            shortest(value) + " in the scenario");
     } else if (value < 0.0) {
         problems_.error(line.number, row.rain_place, "rain cannot be negative",
                         "if " + shortest(value) + " marks a missing value, state missing: " +
@@ -164,6 +168,12 @@ bool CsvRowReader::read_reading(Role role, const CsvLine& line, const CsvCell& c
     const CsvColumn& column = role == Role::start ? *columns_.start : *columns_.end;
     if (first_row_ && parse_number(cell.text)) {
         header_lacks_unit_ = true;
+        if (columns_.of_tips) {
+            problems_.error(line.number, place,
+                            "column " + shown(column.title) + " holds numbers, not timestamps",
+                            std::string(kTipsNeedStamps));
+            return false;
+        }
         problems_.error(columns_.line, column.place,
                         "column " + shown(column.title) + " has no unit, but holds numbers",
                         "write the unit of elapsed times in brackets, '" + column.title +
@@ -193,8 +203,9 @@ bool CsvRowReader::place_stamp(Role role, const CsvLine& line, RowTime& time) {
     const ClockReading& reading = role == Role::start ? start_reading_ : end_reading_;
     std::int64_t unix_ms = reading.unix_ms();
     if (zone_ && !reading.has_offset) {
-        // A row may start at the very instant at which the row before it ends.
-        const bool may_touch = role == Role::start && columns_.end;
+        // A row may start at the very instant at which the row before it ends, and two tips may
+        // fall at one.
+        const bool may_touch = role == Role::start && (columns_.end || columns_.of_tips);
         std::optional<std::int64_t> not_before = stamp_before_;
         if (not_before && !may_touch) ++*not_before;
         const auto instant = zone_->instant(reading.face_ms, not_before);

@@ -43,6 +43,9 @@ public:
     /// cells at all.
     [[nodiscard]] bool read(const CsvLine& line, CsvRow& row);
 
+    /// Goes on as if the row read last had been one at this time.
+    void resume_at(const RowTime& time) { stamp_before_ = static_cast<std::int64_t>(time.value); }
+
     /// Timestamps carried offsets.
     [[nodiscard]] bool saw_offsets() const { return offsets_ == Offsets::written; }
     /// A point is known to be the decimal mark.

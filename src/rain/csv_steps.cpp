@@ -13,11 +13,20 @@ constexpr double kSameEdge_h = 1e-9;
 constexpr double kMsPerHour = 3.6e6;
 constexpr double kLongestEvery_ms = 1e15;  // beyond the calendar
 
+/// What to do about a row whose time is not later than the one before it.
+std::string order_advice(RowsOf rows_of, bool same_time) {
+    if (rows_of == RowsOf::storm || same_time)
+        return "rows must come in the order of time, each time once";
+    return "the logger's clock was set back here, or files were put together out of order: correct "
+           "the times, or keep the rows before and after it as two records; rows that repeat "
+           "earlier ones up to the last are left out by themselves";
+}
+
 }  // namespace
 
 CsvStepMaker::CsvStepMaker(const CsvColumns& columns, const CsvLayout& layout,
-                           CsvProblems& problems, std::size_t most_rows)
-    : columns_(columns), layout_(layout), problems_(problems) {
+                           CsvProblems& problems, const Coming& coming)
+    : columns_(columns), layout_(layout), problems_(problems), rows_of_(coming.rows_of) {
     if (!columns.stamped) same_edge_ = columns.to_h.from_canonical(kSameEdge_h);
     if (layout.every_h)
         set_every(*layout.every_h);
@@ -26,9 +35,9 @@ CsvStepMaker::CsvStepMaker(const CsvColumns& columns, const CsvLayout& layout,
     else if (!columns.end)
         form_ = Form::starts;
     steps_.shortest = std::numeric_limits<double>::infinity();
-    steps_.edges.reserve(most_rows + 1);
-    steps_.rain.reserve(most_rows);
-    if (columns.stamped) steps_.offset_minutes.reserve(most_rows + 1);
+    steps_.edges.reserve(coming.most_rows + 1);
+    steps_.rain.reserve(coming.most_rows);
+    if (columns.stamped) steps_.offset_minutes.reserve(coming.most_rows + 1);
 }
 
 void CsvStepMaker::set_every(double every_h) {
@@ -153,7 +162,7 @@ void CsvStepMaker::check_order(const CsvRow& row, const RowTime& time) {
             row.line, time.place,
             same ? "the time of the row above comes again, " + time_text(time)
                  : "time goes back, from " + time_text(*before_) + " to " + time_text(time),
-            "rows must come in the order of time, each time once");
+            order_advice(rows_of_, same));
         step_end_.reset();
     }
     before_ = time;

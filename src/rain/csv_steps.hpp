@@ -9,6 +9,7 @@
 #include <vector>
 
 #include "rain/csv_rows.hpp"
+#include "rain/hyetograph_reading.hpp"
 
 // Rows become steps: edges in order, holes found, cumulative readings turned into depths.
 namespace rainledger {
@@ -34,8 +35,12 @@ struct PlainRow {
 
 class CsvStepMaker {
 public:
+    struct Coming {
+        RowsOf rows_of = RowsOf::storm;
+        std::size_t most_rows = 0;  ///< about, to set memory aside
+    };
     CsvStepMaker(const CsvColumns& columns, const CsvLayout& layout, CsvProblems& problems,
-                 std::size_t most_rows);
+                 const Coming& coming);
 
     void add(const CsvRow& row);
     /// Notes a row that could not be told into cells.
@@ -76,6 +81,7 @@ private:
     const CsvColumns& columns_;
     const CsvLayout& layout_;
     CsvProblems& problems_;
+    RowsOf rows_of_;
     Form form_ = Form::covered;
     double every_ = 0.0;      // in units of RowTime::value
     double same_edge_ = 0.0;  // nearer times are one edge

@@ -5,6 +5,7 @@
 #include <utility>
 
 #include "rainledger/base/cut.hpp"
+#include "rainledger/rain/hyetograph_csv.hpp"
 
 namespace rainledger {
 namespace {
@@ -178,6 +179,14 @@ void report_form(CsvProblems& problems, const CsvLine& line, const CsvCell& cell
     else
         problems.error(line.number, column, "there is text behind the closing quote of this cell",
                        "a quote inside a quoted cell is doubled");
+}
+
+std::size_t header_line(std::string_view text) {
+    constexpr std::string_view kByteOrderMark = "\xEF\xBB\xBF";
+    if (text.starts_with(kByteOrderMark)) text.remove_prefix(kByteOrderMark.size());
+    CsvLines lines(text);
+    CsvLine header;
+    return lines.next(header) ? header.number : 0;
 }
 
 }  // namespace rainledger

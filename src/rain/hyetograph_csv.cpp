@@ -5,11 +5,13 @@
 #include <utility>
 
 #include "rain/csv_header.hpp"
+#include "rain/csv_opening.hpp"
 #include "rain/csv_plain_rows.hpp"
 #include "rain/csv_rows.hpp"
 #include "rain/csv_steps.hpp"
 #include "rain/csv_text.hpp"
 #include "rain/hyetograph_checks.hpp"
+#include "rain/hyetograph_reading.hpp"
 #include "rainledger/rain/timestamp.hpp"
 
 namespace rainledger {
@@ -19,12 +21,6 @@ constexpr std::size_t kSample = 65536;  // bytes
 
 constexpr std::string_view kExample =
     "a file begins with a row such as 'end [min],depth [mm]', then one row per step";
-
-constexpr std::string_view kByteOrderMark = "\xEF\xBB\xBF";
-
-bool is_utf16(std::string_view text) {
-    return text.starts_with("\xFF\xFE") || text.starts_with("\xFE\xFF");
-}
 
 /// The rows of a text judged by its first part, and some more; to set memory aside.
 std::size_t likely_rows(std::string_view text) {
@@ -37,20 +33,25 @@ std::size_t likely_rows(std::string_view text) {
 /// Reads one file from its first line to its hyetograph.
 class HyetographReader {
 public:
-    HyetographReader(const SourceText& source, const CsvLayout& layout, CsvProblems& problems)
-        : source_(source), layout_(layout), problems_(problems), lines_(source.text()) {}
+    HyetographReader(const SourceText& source, const CsvLayout& layout, RowsOf rows_of,
+                     CsvProblems& problems)
+        : source_(source),
+          layout_(layout),
+          rows_of_(rows_of),
+          problems_(problems),
+          lines_(source.text()) {}
 
     std::optional<Hyetograph> read();
 
 private:
     bool open();
-    void report_nul(std::size_t byte);
     std::optional<CsvSteps> read_rows();
     [[nodiscard]] Hyetograph build(CsvSteps steps);
     [[nodiscard]] StampedEdges stamped_edges(const CsvSteps& steps);
 
     const SourceText& source_;
     const CsvLayout& layout_;
+    RowsOf rows_of_;
     CsvProblems& problems_;
     CsvLines lines_;
     CsvColumns columns_;
@@ -59,13 +60,8 @@ private:
 };
 
 bool HyetographReader::open() {
-    if (const std::size_t nul = source_.text().find('\0'); nul != std::string::npos) {
-        report_nul(nul);
-        return false;
-    }
-    if (layout_.zone && !(zone_ = Zone::find(*layout_.zone)))
-        problems_.file_error("time zone " + shown(*layout_.zone) + " is not known here",
-                             "write a name of the time zone database, such as Europe/Madrid");
+    if (holds_nul(source_.text(), problems_)) return false;
+    zone_ = find_zone(layout_, problems_);
     CsvLine header;
     if (!lines_.next(header)) {
         problems_.file_error("the file holds no rows", std::string(kExample));
@@ -81,18 +77,9 @@ bool HyetographReader::open() {
     return !problems_.any_error();
 }
 
-void HyetographReader::report_nul(std::size_t byte) {
-    const std::string_view before = std::string_view(source_.text()).substr(0, byte);
-    const auto lines = static_cast<std::size_t>(std::count(before.begin(), before.end(), '\n'));
-    const std::size_t newline = before.rfind('\n');
-    problems_.error(lines + 1, newline == std::string_view::npos ? byte + 1 : byte - newline,
-                    "there is a NUL byte here",
-                    "the file is damaged, or not plain text; save it anew as UTF-8");
-}
-
 std::optional<CsvSteps> HyetographReader::read_rows() {
     CsvRowReader reader(columns_, layout_, zone_, problems_);
-    CsvStepMaker maker(columns_, layout_, problems_, likely_rows(source_.text()));
+    CsvStepMaker maker(columns_, layout_, problems_, {rows_of_, likely_rows(source_.text())});
     if (problems_.any_error()) return std::nullopt;
     CsvLine line;
     CsvRow row;
@@ -138,6 +125,7 @@ Hyetograph HyetographReader::build(CsvSteps steps) {
             rain.depth_mm[i] *= rain.duration_h[i];
     for (const std::size_t step : steps.dry)
         rain.taken_as_dry_h += rain.duration_h[step];
+    rain.dry_steps = steps.dry;
     check_steps(rain, steps, columns_, source_.text(), problems_);
     return rain;
 }
@@ -153,19 +141,21 @@ std::optional<Hyetograph> HyetographReader::read() {
 
 }  // namespace
 
-std::optional<Hyetograph> read_hyetograph_csv(const std::string& name, std::string text,
-                                              const CsvLayout& layout, Diagnostics& diagnostics) {
-    if (is_utf16(text)) {
-        diagnostics.error(SourceText(name, {}).at(1, 1), "the file is UTF-16 text",
-                          "save it as UTF-8");
-        return std::nullopt;
-    }
-    if (text.starts_with(kByteOrderMark)) text.erase(0, kByteOrderMark.size());
+std::optional<Hyetograph> read_hyetograph_rows(const std::string& name, std::string text,
+                                               const CsvLayout& layout, RowsOf rows_of,
+                                               Diagnostics& diagnostics) {
     const SourceText source(name, std::move(text));
     CsvProblems problems(source, diagnostics);
-    auto rain = HyetographReader(source, layout, problems).read();
+    auto rain = HyetographReader(source, layout, rows_of, problems).read();
     problems.close();
     return rain;
+}
+
+std::optional<Hyetograph> read_hyetograph_csv(const std::string& name, std::string text,
+                                              const CsvLayout& layout, Diagnostics& diagnostics) {
+    auto plain = without_mark(name, std::move(text), diagnostics);
+    if (!plain) return std::nullopt;
+    return read_hyetograph_rows(name, *std::move(plain), layout, RowsOf::storm, diagnostics);
 }
 
 bool is_known_zone(const std::string& zone) {

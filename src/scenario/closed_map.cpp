@@ -6,6 +6,17 @@
 #include "scenario/yaml.hpp"
 
 namespace rainledger {
+namespace {
+
+/// "'a', 'b' or 'c'".
+std::string choice_of(Words keys) {
+    std::string out;
+    for (std::size_t i = 0; i < keys.size(); ++i)
+        out += (i == 0 ? "" : i + 1 == keys.size() ? " or " : ", ") + in_quotes(keys[i]);
+    return out;
+}
+
+}  // namespace
 
 std::optional<ClosedMap> ClosedMap::read(const Reading& reading, const Entry& owner,
                                          std::string what, Words keys, const std::string& hint) {
@@ -52,6 +63,27 @@ const Entry* ClosedMap::require(std::string_view key, std::string_view example) 
         reading_->error(owner_mark_, "'" + std::string(key) + "' is missing from " + what_,
                         "add '" + std::string(key) + ": " + std::string(example) + "'");
     return entry;
+}
+
+const Entry* ClosedMap::exactly_one(Words keys, const std::string& none,
+                                    const std::string& none_hint,
+                                    const std::string& several_hint) const {
+    const Entry* only = nullptr;
+    bool misnamed = false;
+    for (const std::string_view key : keys) {
+        misnamed = misnamed || is_misnamed(key);
+        const Entry* entry = find(key);
+        if (entry != nullptr && only != nullptr) {
+            reading_->error(entry->key_mark,
+                            what_ + " takes one of " + choice_of(keys) +
+                                (keys.size() == 2 ? ", not both" : ", not several"),
+                            several_hint);
+            return nullptr;
+        }
+        if (entry != nullptr) only = entry;
+    }
+    if (only == nullptr && !misnamed) reading_->error(owner_mark_, none, none_hint);
+    return only;
 }
 
 std::optional<double> ClosedMap::quantity(std::string_view key, Dimension dimension,

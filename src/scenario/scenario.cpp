@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <filesystem>
+#include <set>
 #include <tuple>
 #include <utility>
 
@@ -41,7 +42,7 @@ Scenario assemble(std::string title, std::vector<Storm> storms, std::vector<Read
 }
 
 std::optional<Scenario> read_scenario_parts(const std::string& name, std::string text,
-                                            Diagnostics& diagnostics) {
+                                            Diagnostics& diagnostics, Surfaces surfaces) {
     strip_byte_order_mark(text);
     const Reading reading(name, std::move(text), diagnostics);
     if (const auto bad = first_byte_not_text(reading.text())) {
@@ -57,13 +58,14 @@ std::optional<Scenario> read_scenario_parts(const std::string& name, std::string
     if (!map) return std::nullopt;
     std::string title = read_title(*map);
     std::vector<Storm> storms = read_storms(*map);
-    std::vector<ReadSurface> surfaces = read_surfaces(*map);
+    std::vector<ReadSurface> read = read_surfaces(*map, surfaces);
     if (diagnostics.has_errors()) return std::nullopt;
-    warn_about_scenario(storms, surfaces, diagnostics);
-    return assemble(std::move(title), std::move(storms), std::move(surfaces));
+    warn_about_scenario(storms, read, diagnostics);
+    return assemble(std::move(title), std::move(storms), std::move(read));
 }
 
-/// Hands problems on in the order in which they stand in the scenario; those of other files follow.
+/// Hands problems on in the order in which they stand in the scenario; those of other files follow,
+/// each once even where several storms name the file.
 void hand_over(const Diagnostics& found, const std::string& name, Diagnostics& diagnostics) {
     std::vector<Diagnostic> list = found.list();
     std::ranges::stable_sort(list, {}, [&](const Diagnostic& each) {
@@ -71,7 +73,12 @@ void hand_over(const Diagnostics& found, const std::string& name, Diagnostics& d
         return elsewhere ? std::tuple(true, std::size_t{0}, std::size_t{0})
                          : std::tuple(false, each.place.line, each.place.column);
     });
+    std::set<std::tuple<std::string, std::size_t, std::size_t, std::string>> told;
     for (Diagnostic& each : list) {
+        const Place& place = each.place;
+        const bool again = place.file != name &&
+                           !told.emplace(place.file, place.line, place.column, each.message).second;
+        if (again) continue;
         if (each.trouble == Trouble::unreadable)
             diagnostics.unreadable(std::move(each.place), each.message, each.hint);
         else if (each.severity == Severity::error)
@@ -83,20 +90,21 @@ void hand_over(const Diagnostics& found, const std::string& name, Diagnostics& d
 
 }  // namespace
 
-std::optional<Scenario> read_scenario(const std::string& path, Diagnostics& diagnostics) {
+std::optional<Scenario> read_scenario(const std::string& path, Diagnostics& diagnostics,
+                                      Surfaces surfaces) {
     std::string problem;
     auto text = read_whole_file(path, problem);
     if (!text) {
         diagnostics.unreadable({path, 0, 0, {}}, "cannot read the scenario: " + problem);
         return std::nullopt;
     }
-    return read_scenario_text(path, std::move(*text), diagnostics);
+    return read_scenario_text(path, std::move(*text), diagnostics, surfaces);
 }
 
 std::optional<Scenario> read_scenario_text(const std::string& name, std::string text,
-                                           Diagnostics& diagnostics) {
+                                           Diagnostics& diagnostics, Surfaces surfaces) {
     Diagnostics found;
-    auto scenario = read_scenario_parts(name, std::move(text), found);
+    auto scenario = read_scenario_parts(name, std::move(text), found, surfaces);
     hand_over(found, name, diagnostics);
     return scenario;
 }

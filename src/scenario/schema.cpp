@@ -3,6 +3,7 @@
 #include <nlohmann/json.hpp>
 
 #include "rainledger/scenario/scenario.hpp"
+#include "scenario/schema_storms.hpp"
 #include "scenario/schema_values.hpp"
 #include "scenario/words.hpp"
 
@@ -10,50 +11,6 @@
 // what takes more than one key to judge is the reader's.
 namespace rainledger {
 namespace {
-
-Json storm_schema() {
-    return closed(
-        {{"hyetograph",
-          described(any_of({text(), reference("hyetograph")}),
-                    "A CSV file, relative to this file; or a map saying how to read it.")},
-         {"steps", described(reference("steps"), "The rain written out step by step.")},
-         {"multiply_by", described(at_least_zero(), "Factor on every depth. Default 1.")},
-         {"continue_for",
-          quantity(Dimension::time, "Dry time appended so that ponds drain. Default none.")}},
-        {}, one_required({"hyetograph", "steps"}));
-}
-
-Json hyetograph_schema() {
-    return closed(
-        {{"file", described(text(), "CSV file, relative to this file.")},
-         {"time", described(text(), "Header of the time column, in full.")},
-         {"rain", described(text(), "Header of the rain column, in full.")},
-         {"unit", described(text(), "Unit of the rain column: mm, in, mm/h, in/h and the like.")},
-         {"time_unit", described(text(), "Unit of elapsed times: s, min, h, d.")},
-         {"kind", described(words(kRainKinds), "What the rain column holds.")},
-         {"stamp", described(words(kStamps), "Which edge of its step a row's time marks.")},
-         {"every", quantity(Dimension::time, "How long each row covers.")},
-         {"zone", described(text(), "Time zone by place, such as Europe/Madrid.")},
-         {"gaps", described(words(kGaps), "dry: holes and empty cells are zero rain.")},
-         {"missing", described(text(), "Text that marks a missing value.")}},
-        {"file"});
-}
-
-Json steps_schema() {
-    Json ends = {{"type", "array"}, {"minItems", 1}};
-    ends["items"] = quantity(Dimension::time, "End of a step, from the storm's start.");
-    Json numbers = {{"type", "array"}, {"minItems", 1}};
-    numbers["items"] = at_least_zero();
-    Json all =
-        Json::array({one_required({"every", "ends"}), one_required({"depths", "intensities"})});
-    return closed(
-        {{"every", quantity(Dimension::time, "Length of every step.")},
-         {"ends", described(ends, "Ends of the steps, rising.")},
-         {"depths", described(numbers, "Rain of each step, in 'unit'.")},
-         {"intensities", described(numbers, "Intensity in each step, in 'unit'.")},
-         {"unit", described(text(), "mm or in for depths, mm/h or in/h for intensities.")}},
-        {"unit"}, {{"allOf", all}});
-}
 
 Json surface_schema() {
     Json shares = {{"type", "object"}, {"minProperties", 1}};
@@ -145,23 +102,31 @@ Json curve_number_schema() {
 }
 
 Json definitions() {
-    return {{"storm", storm_schema()},
-            {"hyetograph", hyetograph_schema()},
-            {"steps", steps_schema()},
-            {"surface", surface_schema()},
-            {"law", law_schema()},
-            {"horton", horton_schema()},
-            {"green_ampt", green_ampt_schema()},
-            {"philip", philip_schema()},
-            {"constant_rate", constant_rate_schema()},
-            {"phi_index", phi_index_schema()},
-            {"curve_number", curve_number_schema()}};
+    Json all = storm_definitions();
+    all.update(Json{{"surface", surface_schema()},
+                    {"law", law_schema()},
+                    {"horton", horton_schema()},
+                    {"green_ampt", green_ampt_schema()},
+                    {"philip", philip_schema()},
+                    {"constant_rate", constant_rate_schema()},
+                    {"phi_index", phi_index_schema()},
+                    {"curve_number", curve_number_schema()}});
+    return all;
 }
 
 /// A map of things by name.
 Json named(const std::string& what, const Json& names) {
     Json map = {{"type", "object"}, {"minProperties", 1}, {"propertyNames", names}};
     map["additionalProperties"] = reference(what);
+    return map;
+}
+
+/// Storms by name, or those of a record alone.
+Json storms_schema(const Json& names) {
+    Json map = named("storm", names);
+    map["properties"] = Json::object(
+        {{kFromRecord, described(reference("from_record"), "The events of a gauge record.")}});
+    map["dependentSchemas"] = Json::object({{kFromRecord, Json::object({{"maxProperties", 1}})}});
     return map;
 }
 
@@ -177,9 +142,10 @@ std::string scenario_schema() {
     schema.update(closed(
         {{"title", described(shown_text(), "Title of the results. Default the file's name.")},
          {"storm", described(reference("storm"), "The one storm.")},
-         {"storms", described(named("storm", plain_name), "Several storms by name.")},
-         {"surfaces", described(named("surface", surface_name), "The surfaces by name.")}},
-        {"surfaces"}, one_required({"storm", "storms"})));
+         {"storms", described(storms_schema(plain_name), "Several storms by name.")},
+         {"surfaces", described(named("surface", surface_name),
+                                "The surfaces by name. Losses need them; storms alone do not.")}},
+        {}, one_required({"storm", "storms"})));
     schema["$defs"] = definitions();
     return schema.dump(2) + "\n";
 }

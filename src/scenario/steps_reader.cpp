@@ -1,52 +1,26 @@
 #include <algorithm>
+#include <array>
 #include <string>
 #include <utility>
 
 #include "rainledger/base/cut.hpp"
 #include "rainledger/base/number.hpp"
 #include "rainledger/base/unit_spellings.hpp"
+#include "scenario/list_reader.hpp"
 #include "scenario/storm_reader.hpp"
 
 // Rain written out step by step in the scenario.
 namespace rainledger {
 namespace {
 
-constexpr std::size_t kMostListed = 20;         // errors told of one list; the rest is not read
 constexpr double kShortestStepH = 1.0 / 3.6e6;  // 1 ms; intensities stay finite
 
 constexpr const char* kStepsExample =
     "write 'steps: {every: 5 min, depths: [0.4, 1.1, 2.6], unit: mm}'";
-
-/// Reads every entry of a list with `read_one`, which returns an optional number; nothing if any is
-/// wrong. A long list of errors is cut short.
-template <class ReadOne>
-std::optional<std::vector<double>> read_numbers(const Reading& reading, const Entry& list,
-                                                ReadOne read_one) {
-    if (!is_list(reading, list, "a list", kStepsExample)) return std::nullopt;
-    std::vector<double> numbers;
-    numbers.reserve(list.value.size());
-    std::size_t wrong = 0;
-    std::size_t position = 0;
-    for (const auto& node : list.value) {
-        ++position;
-        const YAML::Mark mark = node.Mark().is_null() ? list.mark() : node.Mark();
-        const auto number =
-            read_one(Entry{list.key + ", entry " + std::to_string(position), mark, node});
-        if (number)
-            numbers.push_back(*number);
-        else if (++wrong == kMostListed)
-            break;
-    }
-    if (wrong == kMostListed)
-        reading.error(list.key_mark,
-                      "too many errors in '" + list.key + "'; the rest of it is not read");
-    if (wrong > 0) return std::nullopt;
-    if (numbers.empty()) {
-        reading.error(list.mark(), "'" + list.key + "' holds no entries", kStepsExample);
-        return std::nullopt;
-    }
-    return numbers;
-}
+constexpr const char* kTimesHint =
+    "write 'every: 5 min' for equal steps, or 'ends: [5 min, 12 min]'";
+constexpr auto kStepTimes = std::to_array<std::string_view>({"every", "ends"});
+constexpr auto kStepRain = std::to_array<std::string_view>({"depths", "intensities"});
 
 /// A time as it was given.
 struct GivenTime {
@@ -61,16 +35,6 @@ GivenTime split_time(const std::string& text) {
     const std::size_t begin = text.find_first_not_of(" \t");
     const std::size_t stop = text.find_last_not_of(" \t", unit - 1) + 1;
     return {*parse_number(text.substr(begin, stop - begin)), text.substr(unit, end - unit)};
-}
-
-std::optional<double> read_duration(const Reading& reading, const Entry& entry) {
-    const auto hours = read_quantity(reading, entry, Dimension::time, Least::above_zero);
-    if (hours && *hours < kShortestStepH) {
-        reading.error(entry.mark(), entry.key + ": a step shorter than 1 ms cannot be computed",
-                      "check the number and its unit");
-        return std::nullopt;
-    }
-    return hours;
 }
 
 /// Edges in the unit they were given in, with the durations between them in h.
@@ -92,7 +56,7 @@ Edges equal_edges(const std::string& text, double every_h, std::size_t steps) {
 
 /// The end of a step, later than `before` (h).
 std::optional<double> read_end(const Reading& reading, const Entry& entry, double before) {
-    const auto end = read_duration(reading, entry);
+    const auto end = read_step_length(reading, entry);
     if (!end || *end - before >= kShortestStepH) return end;
     reading.error(
         entry.mark(),
@@ -105,7 +69,7 @@ std::optional<double> read_end(const Reading& reading, const Entry& entry, doubl
 std::optional<Edges> read_ends(const Reading& reading, const Entry& list) {
     double before = 0.0;
     std::vector<GivenTime> given;
-    const auto ends_h = read_numbers(reading, list, [&](const Entry& entry) {
+    const auto ends_h = read_list<double>(reading, list, kStepsExample, [&](const Entry& entry) {
         const auto end = read_end(reading, entry, before);
         if (end) {
             before = *end;
@@ -125,22 +89,6 @@ std::optional<Edges> read_ends(const Reading& reading, const Entry& list) {
     for (std::size_t i = 0; i < given.size(); ++i)
         edges.duration_h.push_back(unit.to_canonical(edges.value[i + 1] - edges.value[i]));
     return edges;
-}
-
-/// Exactly one of two keys must be there; reports none and both.
-const Entry* one_of(const ClosedMap& map, std::string_view a, std::string_view b,
-                    const std::string& hint) {
-    const std::string either = "'" + std::string(a) + "' or '" + std::string(b) + "'";
-    if (map.has(a) && map.has(b)) {
-        map.reading().error(map.find(b)->key_mark,
-                            map.what() + " takes one of " + either + ", not both", hint);
-        return nullptr;
-    }
-    if (map.has(a)) return map.find(a);
-    if (map.has(b)) return map.find(b);
-    if (!map.is_misnamed(a) && !map.is_misnamed(b))
-        map.reading().error(map.owner_mark(), map.what() + " needs " + either, hint);
-    return nullptr;
 }
 
 /// The unit of the numbers: one of depth for depths, one of rate for intensities.
@@ -169,7 +117,7 @@ std::optional<Unit> read_rain_unit(const ClosedMap& map, Dimension dimension) {
 
 std::optional<Edges> read_edges(const ClosedMap& map, const Entry& time, std::size_t steps) {
     if (time.key == "ends") return read_ends(map.reading(), time);
-    const auto every_h = read_duration(map.reading(), time);
+    const auto every_h = read_step_length(map.reading(), time);
     if (!every_h) return std::nullopt;
     return equal_edges(time.value.Scalar(), *every_h, steps);
 }
@@ -218,7 +166,7 @@ std::optional<std::vector<double>> read_rain_numbers(const ClosedMap& map, const
         read_rain_unit(map, rain.key == "depths" ? Dimension::depth : Dimension::rate);
     // Without a unit the numbers are still looked at, so that all errors come in one run.
     const Unit factor = unit.value_or(Unit{});
-    auto numbers = read_numbers(map.reading(), rain, [&](const Entry& entry) {
+    auto numbers = read_list<double>(map.reading(), rain, kStepsExample, [&](const Entry& entry) {
         const std::string hint = "write a plain number of zero or more; 'unit' says the unit once";
         auto number = read_bare(map.reading(), entry, hint);
         if (number) number = factor.to_canonical(*number);
@@ -244,12 +192,23 @@ bool match(const Reading& reading, const Edges& edges, const Entry& rain, std::s
 
 }  // namespace
 
+std::optional<double> read_step_length(const Reading& reading, const Entry& entry) {
+    const auto hours = read_quantity(reading, entry, Dimension::time, Least::above_zero);
+    if (hours && *hours < kShortestStepH) {
+        reading.error(entry.mark(), entry.key + ": a step shorter than 1 ms cannot be computed",
+                      "check the number and its unit");
+        return std::nullopt;
+    }
+    return hours;
+}
+
 std::optional<Hyetograph> read_steps(const Reading& reading, const Entry& entry) {
     const auto map = ClosedMap::read(reading, entry, "steps", kStepsKeys, kStepsExample);
     if (!map) return std::nullopt;
-    const Entry* time = one_of(*map, "every", "ends",
-                               "write 'every: 5 min' for equal steps, or 'ends: [5 min, 12 min]'");
-    const Entry* rain = one_of(*map, "depths", "intensities", kStepsExample);
+    const Entry* time =
+        map->exactly_one(kStepTimes, "steps needs 'every' or 'ends'", kTimesHint, kTimesHint);
+    const Entry* rain = map->exactly_one(kStepRain, "steps needs 'depths' or 'intensities'",
+                                         kStepsExample, kStepsExample);
     std::optional<std::vector<double>> numbers;
     if (rain != nullptr) numbers = read_rain_numbers(*map, *rain);
     if (time == nullptr) return std::nullopt;

@@ -1,18 +1,23 @@
 #include "scenario/storm_reader.hpp"
 
+#include <algorithm>
 #include <utility>
 
 #include "rainledger/base/cut.hpp"
-#include "scenario/plain_text.hpp"
+#include "rainledger/scenario/storm_making.hpp"
+#include "scenario/name_check.hpp"
+#include "scenario/shown.hpp"
 
 namespace rainledger {
 namespace {
 
 constexpr double kLargeFactor = 3.0;  // common practice: allowances are far below
 constexpr double kMostAppended = 1.0e6;
+constexpr double kMostResampled = 1.0e6;
+constexpr double kSameDuration = 1.0e-9;  // relative: rounding of a sum of steps
 
 constexpr const char* kStormExample =
-    "write 'storm: {hyetograph: rain.csv}', or 'steps' in place of the file";
+    "write 'storm: {hyetograph: rain.csv}', or 'steps', 'design' or 'record' in its place";
 
 /// The factor on depths, or 1.
 double read_factor(const ClosedMap& map) {
@@ -38,23 +43,41 @@ void continue_dry(const ClosedMap& map, Storm& storm) {
     append_dry_time(storm.rain, *hours);
 }
 
+void resample_rain(const ClosedMap& map, Storm& storm) {
+    const Entry* entry = map.find("resample");
+    if (entry == nullptr) return;
+    const auto every_h = read_step_length(map.reading(), *entry);
+    if (!every_h || storm.rain.steps() == 0) return;
+    const double duration_h = own_duration_h(storm.rain);
+    if (*every_h > duration_h * (1.0 + kSameDuration)) {
+        map.reading().error(entry->mark(),
+                            "resample: " + map.shown("resample") + " is longer than the storm, " +
+                                brief_time(duration_h),
+                            "its rain would be spread over time in which none fell: shorten it");
+        return;
+    }
+    if (duration_h / *every_h > kMostResampled) {
+        map.reading().error(entry->mark(),
+                            "resample: " + map.shown("resample") +
+                                " would cut the storm into more than a million steps",
+                            "lengthen it; rain says nothing between its own steps");
+        return;
+    }
+    resample_storm(storm, *every_h);
+}
+
 /// The rain of a storm, from exactly one of its forms.
 std::optional<Hyetograph> read_rain(const ClosedMap& map, Storm& storm) {
-    const Entry* hyetograph = map.find("hyetograph");
-    const Entry* steps = map.find("steps");
-    if (hyetograph != nullptr && steps != nullptr)
-        map.reading().error(steps->key_mark,
-                            map.what() + " takes one of 'hyetograph' or 'steps', not both",
-                            "keep the one that holds its rain");
-    else if (hyetograph != nullptr)
-        return read_hyetograph(map.reading(), *hyetograph, storm.file);
-    else if (steps != nullptr)
-        return read_steps(map.reading(), *steps);
-    else if (!map.is_misnamed("hyetograph") && !map.is_misnamed("steps"))
-        map.reading().error(map.owner_mark(), map.what() + " has no rain",
-                            "add 'hyetograph: rain.csv' or 'steps: {every: 5 min, depths: [0.4, "
-                            "1.1], unit: mm}'");
-    return std::nullopt;
+    const Entry* form = map.exactly_one(
+        kRainForms, map.what() + " has no rain",
+        "add 'hyetograph: rain.csv', 'steps: {every: 5 min, depths: [0.4, 1.1], unit: mm}', "
+        "'design: {...}' or 'record: {...}'",
+        "keep the one that holds its rain");
+    if (form == nullptr) return std::nullopt;
+    if (form->key == "hyetograph") return read_hyetograph(map.reading(), *form, storm);
+    if (form->key == "steps") return read_steps(map.reading(), *form);
+    if (form->key == "design") return read_design(map.reading(), *form, storm);
+    return read_event(map.reading(), *form, storm);
 }
 
 Storm read_storm(const Reading& reading, const Entry& entry, std::string name) {
@@ -65,34 +88,46 @@ Storm read_storm(const Reading& reading, const Entry& entry, std::string name) {
     const auto map = ClosedMap::read(reading, entry, what, kStormKeys, kStormExample);
     if (!map) return read;
     read.multiply_by = read_factor(*map);
-    if (auto rain = read_rain(*map, read)) {
-        read.rain = std::move(*rain);
-        multiply_depths(read.rain, read.multiply_by);
-    }
+    if (auto rain = read_rain(*map, read)) read.rain = *std::move(rain);
+    resample_rain(*map, read);
+    multiply_depths(read.rain, read.multiply_by);
     continue_dry(*map, read);
     return read;
 }
 
-void check_storm_name(const Reading& reading, const Entry& entry) {
-    const std::string hint = "names stand in tables and paths: use words, '-' and '_'";
-    if (is_blank(entry.key))
-        reading.error(entry.key_mark, "a storm's name is empty", hint);
-    else if (entry.key.find_first_of(".,\n\r") != std::string::npos)
-        reading.error(entry.key_mark,
-                      "storm name " + in_quotes(entry.key) + " holds a dot, comma or newline",
-                      hint);
-    else if (holds_hidden_characters(entry.key))
-        reading.error(entry.key_mark,
-                      "storm name " + in_quotes(entry.key) + " holds a character that is not shown",
-                      kHiddenHint);
+/// The storms of a record, which leave no place for others beside them.
+std::vector<Storm> read_record_alone(const Reading& reading, const std::vector<Entry>& entries,
+                                     const Entry& from_record) {
+    if (entries.size() > 1)
+        reading.error(from_record.key_mark, "'from_record' stands alone under 'storms'",
+                      "take the other storms out, or name events one by one with 'record'");
+    return read_from_record(reading, from_record);
+}
+
+/// Whether what belongs into a storm stands in the place of one: 'storms: {design: {...}}'. A
+/// storm may have such a name where its own rain stands below it.
+bool is_nameless(const Reading& reading, const Entry& entry) {
+    if (!holds(kRainForms, entry.key)) return false;
+    if (entry.value.IsMap())
+        for (const auto& inner : entry.value)
+            if (inner.first.IsScalar() && holds(kRainForms, inner.first.Scalar())) return false;
+    reading.error(entry.key_mark,
+                  in_quotes(entry.key) + " stands where the name of a storm belongs",
+                  "give the storm a name, 'storms: {july: {" + entry.key +
+                      ": ...}}', or write 'storm:' for a single one");
+    return true;
 }
 
 std::vector<Storm> read_named_storms(const Reading& reading, const Entry& entry) {
     const std::string hint = "write 'storms:' with one name per storm, each with its own rain";
     std::vector<Storm> storms;
     if (!is_map(reading, entry, "a map of storms", hint)) return storms;
-    for (const Entry& named : entries_of(reading, entry, "storms")) {
-        check_storm_name(reading, named);
+    const std::vector<Entry> entries = entries_of(reading, entry, "storms");
+    const auto from_record = std::ranges::find(entries, kFromRecord, &Entry::key);
+    if (from_record != entries.end()) return read_record_alone(reading, entries, *from_record);
+    for (const Entry& named : entries) {
+        if (is_nameless(reading, named)) continue;
+        static_cast<void>(is_name(reading, named, "storm"));
         storms.push_back(read_storm(reading, named, named.key));
     }
     if (entry.value.size() == 0) reading.error(entry.mark(), "'storms' names no storm", hint);

@@ -4,6 +4,7 @@
 
 #include "rainledger/base/cut.hpp"
 #include "scenario/losses_reader.hpp"
+#include "scenario/name_check.hpp"
 #include "scenario/plain_text.hpp"
 
 namespace rainledger {
@@ -19,19 +20,9 @@ constexpr const char* kSurfacesExample =
     "impervious}'";
 
 void check_surface_name(const Reading& reading, const Entry& entry) {
-    const std::string& name = entry.key;
-    if (is_blank(name))
-        reading.error(entry.key_mark, "a surface's name is empty", "give it a name");
-    else if (name.find_first_of(".,\n\r") != std::string::npos)
-        reading.error(entry.key_mark,
-                      "surface name " + in_quotes(name) + " holds a dot, comma or newline",
-                      "names stand in tables and paths: use words, '-' and '_'");
-    else if (holds_hidden_characters(name))
-        reading.error(entry.key_mark,
-                      "surface name " + in_quotes(name) + " holds a character that is not shown",
-                      kHiddenHint);
-    else if (std::ranges::find(kReservedNames, std::string_view(name)) != kReservedNames.end())
-        reading.error(entry.key_mark, "a surface cannot be called '" + name + "'",
+    if (!is_name(reading, entry, "surface")) return;
+    if (std::ranges::find(kReservedNames, std::string_view(entry.key)) != kReservedNames.end())
+        reading.error(entry.key_mark, "a surface cannot be called '" + entry.key + "'",
                       "site, storm, storms and table have meanings of their own");
 }
 
@@ -146,12 +137,12 @@ void warn_drains_to_surface(const Reading& reading, const std::vector<ReadSurfac
 
 }  // namespace
 
-std::vector<ReadSurface> read_surfaces(const ClosedMap& scenario) {
+std::vector<ReadSurface> read_surfaces(const ClosedMap& scenario, Surfaces needed) {
     const Reading& reading = scenario.reading();
     std::vector<ReadSurface> surfaces;
     const Entry* entry = scenario.find("surfaces");
     if (entry == nullptr) {
-        if (!scenario.is_misnamed("surfaces"))
+        if (needed == Surfaces::needed && !scenario.is_misnamed("surfaces"))
             reading.error(scenario.owner_mark(), "the scenario has no surfaces", kSurfacesExample);
         return surfaces;
     }

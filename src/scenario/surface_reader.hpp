@@ -25,8 +25,9 @@ struct ReadSurface {
     std::vector<NamedShare> runs_onto;
 };
 
-/// The surfaces of the scenario's top level, their run-on resolved.
-[[nodiscard]] std::vector<ReadSurface> read_surfaces(const ClosedMap& scenario);
+/// The surfaces of the scenario's top level, their run-on resolved. Where they are not needed there
+/// may be none.
+[[nodiscard]] std::vector<ReadSurface> read_surfaces(const ClosedMap& scenario, Surfaces needed);
 
 /// The value of `runs_onto`: a name, or a map of shares.
 [[nodiscard]] std::vector<NamedShare> read_runs_onto(const Reading& reading, const Entry& entry);

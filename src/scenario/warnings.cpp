@@ -62,7 +62,9 @@ std::string long_step(const Storm& storm, const Surface& surface, const SurfaceL
 
 void warn_of_results(const Scenario& scenario, const Storm& storm, const SiteLedger& ledger,
                      Diagnostics& diagnostics) {
-    if (storm.rain.taken_as_dry_h > 0.0)
+    // Of an event out of a record, reading it has said so.
+    const bool is_event = std::holds_alternative<EventOrigin>(storm.origin);
+    if (storm.rain.taken_as_dry_h > 0.0 && !is_event)
         diagnostics.warning(storm.place, storm.name + ": " + minutes(storm.rain.taken_as_dry_h) +
                                              " of the record had no values and were taken as dry");
     for (std::size_t i = 0; i < scenario.site.surfaces.size(); ++i) {

@@ -15,8 +15,11 @@ using Words = std::span<const std::string_view>;
 inline constexpr auto kScenarioKeys =
     std::to_array<std::string_view>({"title", "storm", "storms", "surfaces"});
 
-inline constexpr auto kStormKeys =
-    std::to_array<std::string_view>({"hyetograph", "steps", "multiply_by", "continue_for"});
+inline constexpr auto kStormKeys = std::to_array<std::string_view>(
+    {"hyetograph", "steps", "design", "record", "resample", "multiply_by", "continue_for"});
+/// The forms of a storm's rain, of which it has one.
+inline constexpr auto kRainForms =
+    std::to_array<std::string_view>({"hyetograph", "steps", "design", "record"});
 inline constexpr auto kHyetographKeys =
     std::to_array<std::string_view>({"file", "time", "rain", "unit", "time_unit", "kind", "stamp",
                                      "every", "zone", "gaps", "missing"});
@@ -26,6 +29,29 @@ inline constexpr auto kRainKinds =
     std::to_array<std::string_view>({"depth", "intensity", "cumulative"});
 inline constexpr auto kStamps = std::to_array<std::string_view>({"start", "end"});
 inline constexpr auto kGaps = std::to_array<std::string_view>({"dry"});
+
+inline constexpr auto kDesignKeys = std::to_array<std::string_view>(
+    {"pattern", "duration", "every", "peak_at", "curve", "interpolate", "return_period",
+     "statistics", "depth", "depths", "formula"});
+inline constexpr auto kDepthSources =
+    std::to_array<std::string_view>({"statistics", "depth", "depths", "formula"});
+inline constexpr auto kPatterns = std::to_array<std::string_view>(
+    {"uniform", "triangular", "alternating_blocks", "keifer_chu", "mass_curve"});
+inline constexpr auto kInterpolate = std::to_array<std::string_view>({"linear", "smooth"});
+inline constexpr auto kFormulaKeys = std::to_array<std::string_view>({"a", "b", "m", "n", "time"});
+inline constexpr auto kFormulaTimes = std::to_array<std::string_view>({"s", "min", "h"});
+
+inline constexpr auto kRecordKeys = std::to_array<std::string_view>(
+    {"file", "tip", "count", "tips", "every", "dry_spell", "threshold", "event", "statistics",
+     "time", "rain", "unit", "time_unit", "kind", "stamp", "zone", "missing"});
+inline constexpr auto kFromRecordKeys = std::to_array<std::string_view>(
+    {"file", "tip", "count", "tips", "every", "dry_spell", "threshold", "at_least", "statistics",
+     "time", "rain", "unit", "time_unit", "kind", "stamp", "zone", "missing"});
+inline constexpr std::string_view kFromRecord = "from_record";
+inline constexpr auto kCounts = std::to_array<std::string_view>({"per_row", "running"});
+inline constexpr auto kTips = std::to_array<std::string_view>({"in_steps", "spread"});
+inline constexpr std::string_view kLargest = "largest";
+inline constexpr auto kStretchKeys = std::to_array<std::string_view>({"from", "to"});
 
 inline constexpr auto kSurfaceKeys =
     std::to_array<std::string_view>({"area", "drains_to", "interception", "depression_storage",
@@ -50,6 +76,9 @@ inline constexpr auto kPhiIndexKeys = std::to_array<std::string_view>({"observed
 inline constexpr auto kCurveNumberKeys = std::to_array<std::string_view>(
     {"number", "initial_abstraction_ratio", "tabulated_ratio", "antecedent"});
 inline constexpr auto kConditions = std::to_array<std::string_view>({"I", "II", "III"});
+
+/// Whether the word is one of the list.
+[[nodiscard]] bool holds(Words words, std::string_view word);
 
 /// The word in `known` for what the trade also calls `typed`; nothing if `typed` is no such word or
 /// its counterpart is not known here.

@@ -1,6 +1,7 @@
 #include "scenario/yaml.hpp"
 
 #include <algorithm>
+#include <cmath>
 #include <map>
 #include <utility>
 
@@ -50,6 +51,28 @@ void wrong_kind(const Reading& reading, const Entry& entry, const std::string& b
 
 std::string example_of(Dimension dimension) {
     return std::string(example_quantity(dimension));
+}
+
+/// A number without unit.
+std::optional<double> read_number(const Reading& reading, const Entry& entry,
+                                  const std::string& hint) {
+    const auto text = read_text(reading, entry, hint);
+    if (!text) return std::nullopt;
+    const ParsedQuantity parsed = parse_bare_number(*text);
+    if (!parsed.value)
+        reading.error(entry.mark(), entry.key + ": " + parsed.problem,
+                      hint_of_comma(*text, parsed.hint, hint));
+    return parsed.value;
+}
+
+/// The number, unless it is too large to compute with, which is reported.
+std::optional<double> small_enough(const Reading& reading, const Entry& entry,
+                                   const std::optional<double>& number, const std::string& hint) {
+    if (!number || std::abs(*number) <= kLargestValue) return number;
+    reading.error(
+        entry.mark(),
+        entry.key + ": " + in_quotes(entry.value.Scalar()) + " is too large to compute with", hint);
+    return std::nullopt;
 }
 
 /// The fraction probably meant by a percentage with its sign or without: "0.20" for "20".
@@ -207,22 +230,18 @@ std::optional<double> read_quantity(const Reading& reading, const Entry& entry, 
 
 std::optional<double> read_bare(const Reading& reading, const Entry& entry,
                                 const std::string& hint) {
-    const auto text = read_text(reading, entry, hint);
-    if (!text) return std::nullopt;
-    const ParsedQuantity parsed = parse_bare_number(*text);
-    const auto refuse = [&](const std::string& problem) {
-        reading.error(entry.mark(), entry.key + ": " + problem, hint);
-        return std::nullopt;
-    };
-    if (!parsed.value) {
-        reading.error(entry.mark(), entry.key + ": " + parsed.problem,
-                      hint_of_comma(*text, parsed.hint, hint));
+    const auto number = read_number(reading, entry, hint);
+    if (number && !(*number >= 0.0)) {
+        reading.error(entry.mark(),
+                      entry.key + ": " + in_quotes(entry.value.Scalar()) + " is below zero", hint);
         return std::nullopt;
     }
-    if (!(*parsed.value >= 0.0)) return refuse(in_quotes(*text) + " is below zero");
-    if (!(*parsed.value <= kLargestValue))
-        return refuse(in_quotes(*text) + " is too large to compute with");
-    return parsed.value;
+    return small_enough(reading, entry, number, hint);
+}
+
+std::optional<double> read_signed(const Reading& reading, const Entry& entry,
+                                  const std::string& hint) {
+    return small_enough(reading, entry, read_number(reading, entry, hint), hint);
 }
 
 std::optional<double> read_fraction(const Reading& reading, const Entry& entry) {

@@ -85,6 +85,9 @@ enum class Least { zero, above_zero };
 /// A number without unit, zero or more and small enough to compute with.
 [[nodiscard]] std::optional<double> read_bare(const Reading& reading, const Entry& entry,
                                               const std::string& hint);
+/// The same of either sign.
+[[nodiscard]] std::optional<double> read_signed(const Reading& reading, const Entry& entry,
+                                                const std::string& hint);
 /// A number without unit from 0 to 1.
 [[nodiscard]] std::optional<double> read_fraction(const Reading& reading, const Entry& entry);
 /// One of a few words, as its index.
@@ -115,6 +118,12 @@ public:
     /// The entry of a key that must be there; its absence is reported at the map's owner, unless
     /// the key stands there under another name.
     [[nodiscard]] const Entry* require(std::string_view key, std::string_view example) const;
+
+    /// The entry of one of the keys that exclude each other; reports more than one, and with `none`
+    /// that there is none.
+    [[nodiscard]] const Entry* exactly_one(Words keys, const std::string& none,
+                                           const std::string& none_hint,
+                                           const std::string& several_hint) const;
 
     /// Nothing where the key is absent, or wrong and reported.
     [[nodiscard]] std::optional<double> quantity(std::string_view key, Dimension dimension,

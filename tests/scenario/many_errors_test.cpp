@@ -84,10 +84,10 @@ TEST_CASE("a long loop names its first surfaces and its last") {
 TEST_CASE("a long line is not shown, its place is") {
     const std::string padding(5000, ' ');
     CHECK(problems(with_storm("{" + padding +
-                              "design: {}, steps: {every: 1 h, depths: [1], unit: "
+                              "dezign: {}, steps: {every: 1 h, depths: [1], unit: "
                               "mm}}")) ==
-          "lane.yaml:1:5009: error: unknown key 'design' in the storm\n"
-          "    known here: hyetograph, steps, multiply_by, continue_for\n");
+          "lane.yaml:1:5009: error: unknown key 'dezign' in the storm\n"
+          "    did you mean 'design'?\n");
 }
 
 TEST_CASE("bytes that are no text are refused at their place") {

@@ -42,7 +42,7 @@ TEST_CASE("names are more than blanks") {
 )") == R"(lane.yaml:3:3: error: a surface's name is empty
       "  ": {area: 1 ha, losses: impervious}
       ^
-    give it a name
+    names stand in tables and paths: use words, '-' and '_'
 lane.yaml:4:52: error: 'drains_to' is empty
       lot: {area: 1 ha, losses: impervious, drains_to: " "}
                                                        ^

@@ -12,6 +12,9 @@ namespace {
 const std::string kSeedText = R"(title: Millbrook depot
 storms:
   morning: {steps: {every: 5 min, depths: [0.4, 1.1, 2.6], unit: mm}, multiply_by: 1.2}
+  noon: {design: {pattern: keifer_chu, duration: 2 h, every: 10 min, formula: {a: 9 in/h, b: 13, time: min}}}
+  night: {design: {pattern: mass_curve, duration: 2 h, every: 9 min, depth: 62 mm, curve: [[0, 0], [0.4, 1], [1, 1]]}}
+  blocks: {design: {pattern: alternating_blocks, duration: 1 h, every: 5 min, depths: {5 min: 9 mm, 1 h: 3 cm}}, resample: 9 min}
   evening: {steps: {ends: [5 min, 12 min], intensities: [3, 4], unit: mm/h}, continue_for: 1 h}
 surfaces:
   verge:

@@ -267,6 +267,10 @@ TEST_CASE("a wrong word about a rain file is one error, and its rows are still l
           "1: stamp: 'middle' is not a choice here\n4: 'wet' is not a number\n");
     CHECK(heads("file: rain.csv, rain: 'P [mm]', unit: mm, kind: total, stamp: end") ==
           "1: kind: 'total' is not a choice here\n4: 'wet' is not a number\n");
+    folder.write("rain.csv", "\xEF\xBB\xBF# gauge\n , \n  \ntime [min],P [mm]\n5,0.4\n10,wet\n");
+    CHECK(heads("file: rain.csv, rain: 'P [mm]', kind: depth, stamp: middle") ==
+          "1: stamp: 'middle' is not a choice here\n6: 'wet' is not a number\n");
+    CHECK(heads("file: rain.csv, stamp: middle") == "1: stamp: 'middle' is not a choice here\n");
     CHECK(heads("file: starts.csv, stamp: middle") == "1: stamp: 'middle' is not a choice here\n");
     CHECK(heads("file: starts.csv, kind: total") == "1: kind: 'total' is not a choice here\n");
     CHECK(heads("file: starts.csv, unit: mm, kind: intensity") ==

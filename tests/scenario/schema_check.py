@@ -42,12 +42,77 @@ surfaces:
     losses: {curve_number: {number: "89", initial_abstraction_ratio: "+.2"}}
 """
 
+# Further storms that conform, in place of the sample's.
+STORMS = """
+- {design: {pattern: alternating_blocks, duration: 2 h, every: 5 min, peak_at: 0.375, return_period: 10 yr,
+            statistics: county.csv}, resample: 15 min, multiply_by: 1.2}
+- {design: {pattern: keifer_chu, duration: 2 h, every: 5 min,
+            formula: {a: 96.6 in/h, b: -13.9, m: 0.97, n: 1, time: min}}}
+- {design: {pattern: mass_curve, duration: 24 h, every: 15 min, depth: 62 mm, curve: nrcs_II, interpolate: smooth}}
+- {design: {pattern: mass_curve, duration: 24 h, every: 15 min, depth: 62 mm, curve: [[0, 0], [0.3, 0.1], [1, 1]]}}
+- {design: {pattern: uniform, duration: 1 h, every: 5 min, depths: {5 min: 9.8 mm, 1 h: 32 mm}}}
+- {record: {file: logger.csv, tip: 0.2 mm, count: running, tips: spread, every: 5 min, dry_spell: 6 h,
+            threshold: 0.2 mm, event: largest, statistics: county.csv, zone: Europe/Madrid}}
+- {record: {file: gauge.csv, kind: depth, unit: mm, stamp: end, event: 3}}
+- {record: {file: gauge.csv, event: {from: 2031-06-14 13:00, to: 2031-06-14 18:00}}}
+"""
+
+# The number of such a storm, a path into it and the value put there; None takes the key out.
+SPOILED_STORMS = [
+    (0, ["steps"], {"every": "5 min", "depths": [1], "unit": "mm"}),
+    (0, ["resample"], 15),
+    (0, ["design", "pattern"], "chicago"),
+    (0, ["design", "pattern"], "uniform"),
+    (0, ["design", "duration"], None),
+    (0, ["design", "every"], None),
+    (0, ["design", "peak_at"], "37.5 %"),
+    (0, ["design", "return_period"], "10 h"),
+    (0, ["design", "statistics"], None),
+    (0, ["design", "depth"], "62 mm"),
+    (0, ["design", "curve"], "nrcs_II"),
+    (0, ["design", "interpolate"], "smooth"),
+    (1, ["design", "formula", "a"], "96.6 in"),
+    (1, ["design", "formula", "b"], None),
+    (1, ["design", "formula", "m"], 0),
+    (1, ["design", "formula", "time"], "d"),
+    (1, ["design", "formula"], None),
+    (2, ["design", "curve"], "nrcs_IV"),
+    (2, ["design", "curve"], None),
+    (2, ["design", "peak_at"], 0.5),
+    (2, ["design", "return_period"], "10 yr"),
+    (2, ["design", "pattern"], "alternating_blocks"),
+    (3, ["design", "curve"], [[0, 0], [1]]),
+    (3, ["design", "curve"], [[0, 0], [1, 1.5]]),
+    (4, ["design", "depths"], {}),
+    (4, ["design", "depths"], {"5": "9.8 mm"}),
+    (4, ["design", "depths"], {"5 min": 9.8}),
+    (4, ["design", "pattern"], "keifer_chu"),
+    (5, ["record", "file"], None),
+    (5, ["record", "event"], None),
+    (5, ["record", "event"], "biggest"),
+    (5, ["record", "event"], 0),
+    (5, ["record", "tip"], None),
+    (5, ["record", "unit"], "mm"),
+    (5, ["record", "at_least"], "10 mm"),
+    (5, ["record", "gaps"], "dry"),
+    (6, ["record", "tips"], "spread"),
+    (7, ["record", "event", "to"], None),
+    (7, ["record", "event", "from"], "13:00"),
+]
+
+# Maps of storms that conform, and that do not.
+FROM_RECORD = {"file": "logger.csv", "tip": "0.2 mm", "at_least": "10 mm"}
+STORM_MAPS = [({"from_record": FROM_RECORD}, True),
+              ({"from_record": FROM_RECORD, "a": {"hyetograph": "a.csv"}}, False),
+              ({"from_record": {**FROM_RECORD, "event": "largest"}}, False),
+              ({"from_record": {"tip": "0.2 mm"}}, False),
+              ({"a": {"from_record": FROM_RECORD}}, False)]
+
 # A path into the sample and the value put there; None takes the key out.
 SPOILED = [
     (["titel"], "a"),
     (["storms"], {"a": {"hyetograph": "a.csv"}}),
     (["storm"], None),
-    (["surfaces"], None),
     (["surfaces"], {}),
     (["storm", "design"], {}),
     (["storm", "hyetograph"], "a.csv"),
@@ -118,6 +183,16 @@ def main():
     for path, value in SPOILED:
         if validator.is_valid(spoiled(sample, path, value)):
             wrong.append(f"conforms although spoiled: {'.'.join(path)}: {value}")
+
+    storms = yaml.safe_load(STORMS)
+    for storm in storms:
+        wrong += [f"{storm}: {error.message}" for error in validator.iter_errors({"storm": storm})]
+    for number, path, value in SPOILED_STORMS:
+        if validator.is_valid({"storm": spoiled(storms[number], path, value)}):
+            wrong.append(f"conforms although spoiled: storm {number}, {'.'.join(path)}: {value}")
+    for storms_by_name, conforms in STORM_MAPS:
+        if validator.is_valid({"storms": storms_by_name}) != conforms:
+            wrong.append(f"{'does not conform' if conforms else 'conforms'}: {storms_by_name}")
 
     scenarios = sorted(pathlib.Path(folder).rglob("*.yaml"))
     for path in scenarios:

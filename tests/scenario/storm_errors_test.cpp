@@ -10,7 +10,7 @@ TEST_CASE("a scenario has one storm or storms by name") {
 )") == R"(lane.yaml:1:1: error: the scenario has no storm
     surfaces: {lot: {area: 1 ha, losses: impervious}}
     ^
-    write 'storm: {hyetograph: rain.csv}', or 'steps' in place of the file
+    write 'storm: {hyetograph: rain.csv}', or 'steps', 'design' or 'record' in its place
 )");
     CHECK(problems(R"(storm: {steps: {every: 1 h, depths: [1, 2, 9, 2, 1, 1], unit: mm}}
 storms: {a: {steps: {every: 1 h, depths: [1], unit: mm}}}
@@ -39,27 +39,28 @@ TEST_CASE("a storm has one form of rain") {
     CHECK(problems(with_storm("{}")) == R"(lane.yaml:1:1: error: the storm has no rain
     storm: {}
     ^
-    add 'hyetograph: rain.csv' or 'steps: {every: 5 min, depths: [0.4, 1.1], unit: mm}'
+    add 'hyetograph: rain.csv', 'steps: {every: 5 min, depths: [0.4, 1.1], unit: mm}', 'design: {...}' or 'record: {...}'
 )");
     CHECK(problems(with_storm("{multiply_by: 1}")) == R"(lane.yaml:1:1: error: the storm has no rain
     storm: {multiply_by: 1}
     ^
-    add 'hyetograph: rain.csv' or 'steps: {every: 5 min, depths: [0.4, 1.1], unit: mm}'
+    add 'hyetograph: rain.csv', 'steps: {every: 5 min, depths: [0.4, 1.1], unit: mm}', 'design: {...}' or 'record: {...}'
 )");
-    CHECK(problems(with_storm("{hyetograph: a.csv, steps: {every: 1 h, depths: [1], unit: mm}}")) ==
-          R"(lane.yaml:1:28: error: the storm takes one of 'hyetograph' or 'steps', not both
+    CHECK(
+        problems(with_storm("{hyetograph: a.csv, steps: {every: 1 h, depths: [1], unit: mm}}")) ==
+        R"(lane.yaml:1:28: error: the storm takes one of 'hyetograph', 'steps', 'design' or 'record', not several
     storm: {hyetograph: a.csv, steps: {every: 1 h, depths: [1], unit: mm}}
                                ^
     keep the one that holds its rain
 )");
-    CHECK(problems(with_storm("{design: {}}")) == R"(lane.yaml:1:1: error: the storm has no rain
-    storm: {design: {}}
+    CHECK(problems(with_storm("{rainstorm: {}}")) == R"(lane.yaml:1:1: error: the storm has no rain
+    storm: {rainstorm: {}}
     ^
-    add 'hyetograph: rain.csv' or 'steps: {every: 5 min, depths: [0.4, 1.1], unit: mm}'
-lane.yaml:1:9: error: unknown key 'design' in the storm
-    storm: {design: {}}
+    add 'hyetograph: rain.csv', 'steps: {every: 5 min, depths: [0.4, 1.1], unit: mm}', 'design: {...}' or 'record: {...}'
+lane.yaml:1:9: error: unknown key 'rainstorm' in the storm
+    storm: {rainstorm: {}}
             ^
-    known here: hyetograph, steps, multiply_by, continue_for
+    known here: hyetograph, steps, design, record, resample, multiply_by, continue_for
 )");
 }
 

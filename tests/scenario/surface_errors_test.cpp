@@ -23,7 +23,7 @@ lane.yaml:4:3: error: surface name 'a.b' holds a dot, comma or newline
 lane.yaml:5:3: error: a surface's name is empty
       "": {area: 1 ha, losses: impervious}
       ^
-    give it a name
+    names stand in tables and paths: use words, '-' and '_'
 lane.yaml:6:3: error: surface name 'c,d' holds a dot, comma or newline
       "c,d": {area: 1 ha, losses: impervious}
       ^

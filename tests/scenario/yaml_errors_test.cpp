@@ -294,7 +294,7 @@ surfaces: {lot: {area: 1 ha, losses: impervious}}
 )") == R"(lane.yaml:1:8: error: a map belongs here, not 'rain.csv'
     storm: rain.csv
            ^
-    write 'storm: {hyetograph: rain.csv}', or 'steps' in place of the file
+    write 'storm: {hyetograph: rain.csv}', or 'steps', 'design' or 'record' in its place
 )");
     CHECK(problems(R"(storms: {}
 surfaces: {lot: {area: 1 ha, losses: impervious}}

@@ -38,6 +38,7 @@ struct Hyetograph {
 
     std::size_t own_steps = 0;    ///< steps of the storm itself; dry ones appended later come after
     double taken_as_dry_h = 0.0;  ///< total of the holes and empty cells that were taken as no rain
+    std::vector<std::size_t> dry_steps;  ///< those steps, rising; no step that append_dry_time adds
     bool clock_assumed =
         false;  ///< stamps without zone or offset: the clock is taken never to change
 

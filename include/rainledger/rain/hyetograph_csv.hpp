@@ -1,7 +1,9 @@
 #pragma once
 
+#include <cstddef>
 #include <optional>
 #include <string>
+#include <string_view>
 
 #include "rainledger/base/diagnostic.hpp"
 #include "rainledger/rain/hyetograph.hpp"
@@ -64,6 +66,10 @@ struct CsvLayout {
                                                             std::string text,
                                                             const CsvLayout& layout,
                                                             Diagnostics& diagnostics);
+
+/// The line of CSV text that read_hyetograph_csv takes for its header, from 1; 0 where there is
+/// none.
+[[nodiscard]] std::size_t header_line(std::string_view text);
 
 /// True if `zone` is in the machine's time zone database. Never throws.
 [[nodiscard]] bool is_known_zone(const std::string& zone);

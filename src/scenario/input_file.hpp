@@ -1,0 +1,23 @@
+#pragma once
+
+#include <optional>
+#include <string>
+
+#include "scenario/yaml.hpp"
+
+// Files that a scenario names.
+namespace rainledger {
+
+/// A file that the scenario names, with its content.
+struct InputFile {
+    std::string name;  ///< as the scenario names it
+    std::string path;  ///< as opened, and as messages show it: beside the scenario
+    std::string text;
+};
+
+/// Reads the file that `entry` names. Nothing, after reporting, where it names none or the file
+/// cannot be read; `example` shows how to name one.
+[[nodiscard]] std::optional<InputFile> read_input_file(const Reading& reading, const Entry& entry,
+                                                       const std::string& example);
+
+}  // namespace rainledger

@@ -1,0 +1,215 @@
+"""Compares `rainledger storm` with the reference on seeded random design storms and gauge records.
+
+    storm_compare.py PROGRAM [--cases N] [--seed S] [--first I] [--keep DIR]
+
+Depths of steps, windows, events and statistics to 1e-9 mm (and 1e-12 relative), edges to 1e-9 h or
+to the millisecond, return periods to 1e-9 relative. One line per failing case with the arguments
+that reproduce it; then the largest differences by family; the last line is "N passed, N failed".
+Exit status 1 when anything failed.
+"""
+
+import argparse
+from datetime import datetime, timezone
+from fractions import Fraction
+import json
+from pathlib import Path
+import subprocess
+import sys
+import tempfile
+
+from mpmath import mpf, nstr
+
+from gauges import HOUR_MS, WINDOWS_MIN, event_rarity, interval_events, tip_events
+from laws import real
+from storm_cases import draw
+from storms import depth_of, design, largest_window, resample
+
+DEPTH_MM, RELATIVE = mpf("1e-9"), mpf("1e-12")
+TIME_H = mpf("1e-9")
+# A numerical integral of the intensity curve against the program's closed form.
+QUADRATURE = mpf("1e-9")
+PERIOD = mpf("1e-9")
+
+
+class Findings:
+    """What differed in one case, and the largest differences of all by (family, figure)."""
+
+    def __init__(self):
+        self.largest = {}
+        self.start_case("", RELATIVE)
+
+    def start_case(self, family, relative):
+        self.family, self.relative, self.failures = family, relative, []
+
+    def check(self, figure, where, found, wanted, limit):
+        if found is None:
+            self.failures.append(f"{where} {figure}: none but {nstr(wanted, 17)}")
+            return
+        difference = abs(mpf(found) - wanted)
+        key = (self.family, figure)
+        self.largest[key] = max(self.largest.get(key, mpf(0)), difference)
+        if not difference <= limit:
+            self.failures.append(f"{where} {figure}: {found} but {nstr(wanted, 17)} "
+                                 f"(off by {nstr(difference, 3)})")
+
+    def depth(self, figure, where, found, wanted, scale=0):
+        self.check(figure, where, found, wanted,
+                   max(DEPTH_MM, self.relative * max(abs(wanted), scale)))
+
+    def equal(self, what, found, wanted):
+        if found != wanted:
+            self.failures.append(f"{what}: {found} but {wanted}")
+
+
+def run_program(program, folder, *arguments):
+    command = [program, "storm", *arguments, "--json", "-", "--quiet"]
+    done = subprocess.run(command, cwd=folder, capture_output=True, text=True, timeout=60)
+    if done.returncode != 0:
+        raise RuntimeError(f"exit status {done.returncode}: {done.stderr.strip()[:400]}")
+    return json.loads(done.stdout)
+
+
+def unix_ms(text):
+    at = datetime.fromisoformat(text.replace("Z", "+00:00"))
+    at = at if at.tzinfo else at.replace(tzinfo=timezone.utc)
+    return round(at.timestamp() * 1000)
+
+
+def compare_steps(findings, where, found, edges, depths):
+    """Edges in h from the first one, and depths."""
+    findings.equal(f"{where} steps", len(found), len(depths))
+    total = sum(depths)
+    for i, step in enumerate(found[:len(depths)]):
+        for key, edge in (("start_h", edges[i]), ("end_h", edges[i + 1])):
+            findings.check("edge", f"{where} step {i}", step[key], real(edge), TIME_H)
+        findings.depth("step", f"{where} step {i}", step["depth_mm"], depths[i], total)
+    findings.depth("total", where, sum(mpf(step["depth_mm"]) for step in found), total)
+
+
+def compare_design(program, case, folder, findings):
+    request = case["request"]
+    if request["pattern"] == "keifer_chu":
+        findings.start_case("design: keifer_chu", QUADRATURE)
+    else:
+        findings.start_case("design: " + request["pattern"], RELATIVE)
+    storm = run_program(program, folder, "case.yaml")["storms"]["storm"]
+    edges, depths = design(request)
+    for held in storm["rain"]["design"]["held"]:
+        compare_held(findings, held, request, edges, depths)
+    if case["resample_h"]:
+        edges, depths = resample(edges, depths, case["resample_h"])
+    compare_steps(findings, "storm", storm["steps"], edges, depths)
+    findings.depth("total", "storm", storm["rain"]["depth_mm"],
+                   depth_of(request["source"], request["duration_h"]))
+    for minutes, peak in storm["peaks"].items():
+        findings.depth("window", f"{minutes} min", peak["depth_mm"],
+                       largest_window(edges, depths, Fraction(int(minutes), 60)), sum(depths))
+
+
+def compare_held(findings, held, request, edges, depths):
+    marks = [h for h, _ in request["source"][1]] if request["source"][0] == "list" else [
+        Fraction(m, 60) for m in (5, 10, 15, 30, 60, 120, 180, 360, 720, 1440)]
+    duration = min(marks, key=lambda h: abs(mpf(held["duration_h"]) - real(h)))
+    where = f"held {held['duration_h']} h"
+    findings.check("edge", where, held["duration_h"], real(duration), TIME_H)
+    findings.depth("statistic", where, held["statistic_mm"], depth_of(request["source"], duration))
+    findings.depth("window", where, held["storm_mm"], largest_window(edges, depths, duration))
+
+
+def compare_event(findings, where, found, wanted, table):
+    for key, edge in (("starts", "from_ms"), ("ends", "to_ms")):
+        findings.equal(f"{where} {key}", unix_ms(found[key]), wanted[edge])
+    findings.depth("depth", where, found["depth_mm"], wanted["depth_mm"])
+    for minutes in WINDOWS_MIN:
+        findings.depth("window", f"{where} {minutes} min", found["peaks_mm"][str(minutes)],
+                       wanted["peaks"][minutes])
+    findings.depth("five days before", where, found["antecedent_5_day_mm"], wanted["before_mm"])
+    findings.equal(f"{where} five days known", found["antecedent_known"], wanted["before_known"])
+    findings.check("hours without data", where, found["without_data_h"],
+                   mpf(wanted["no_data_ms"]) / 3_600_000, TIME_H)
+    compare_rarity(findings, where, found["rarity"]["by_duration"], event_rarity(table, wanted))
+
+
+def compare_rarity(findings, where, found, wanted):
+    findings.equal(f"{where} durations", len(found), len(wanted))
+    for got, (hours, depth, rarity) in zip(found, wanted):
+        at = f"{where} {got['duration_h']} h"
+        findings.check("edge", at, got["duration_h"], real(hours), TIME_H)
+        findings.depth("window", at, got["depth_mm"], depth)
+        for key, years in zip(("return_period_yr", "more_than_yr", "less_than_yr"), rarity):
+            if years is None or got[key] is None:
+                findings.equal(f"{at} {key}", got[key], years)
+            else:
+                findings.check("return period", at, got[key], years, PERIOD * years)
+
+
+def compare_record(program, case, folder, findings):
+    findings.start_case(case["family"], RELATIVE)
+    arguments = ["record.csv", *case["arguments"]]
+    found = run_program(program, folder, *arguments, "--events")
+    wanted = (tip_events(case["tips"], case["offset_minutes"], case["rule"]) if "tips" in case
+              else interval_events(case["steps"], case["rule"]))
+    findings.equal("events", len(found["events"]), len(wanted))
+    findings.depth("outside", "record", found["outside_mm"], mpf(0))
+    for got, event in zip(found["events"], wanted):
+        compare_event(findings, f"event {got['number']}", got, event, case["table"])
+    number = 1 + max(range(len(wanted)), key=lambda i: len(wanted[i]["depths"]))
+    storm, = run_program(program, folder, *arguments, "--event", str(number))["storms"].values()
+    event = wanted[number - 1]
+    compare_steps(findings, f"event {number}", storm["steps"],
+                  [Fraction(edge - event["from_ms"], HOUR_MS)
+                   for edge in event["edges_ms"]], event["depths"])
+
+
+def run_case(arguments, index, findings):
+    """Whether the case passed; prints a line if not."""
+    case = draw(arguments.seed, index)
+    findings.start_case(case["family"], RELATIVE)
+    with tempfile.TemporaryDirectory() as scratch:
+        folder = Path(scratch)
+        if arguments.keep:
+            folder = Path(arguments.keep) / f"case_{arguments.seed}_{index}"
+            folder.mkdir(parents=True, exist_ok=True)
+        for name, text in case["files"].items():
+            (folder / name).write_text(text, encoding="utf-8")
+        compare = compare_design if case["family"] == "design" else compare_record
+        try:
+            compare(arguments.program, case, folder, findings)
+        except (KeyError, TypeError, ValueError, RuntimeError) as error:
+            findings.failures.append(repr(error))
+    if findings.failures:
+        more = len(findings.failures) - 1
+        print(f"failed: {findings.family}: {findings.failures[0]}"
+              + (f" and {more} more" if more else "")
+              + f" [--seed {arguments.seed} --first {index} --cases 1]", flush=True)
+    return not findings.failures
+
+
+def print_largest(findings):
+    print("largest differences (mm, h, yr):")
+    for family in sorted({family for family, _ in findings.largest}):
+        parts = [f"{figure} {nstr(difference, 2)}"
+                 for (of, figure), difference in findings.largest.items() if of == family]
+        print(f"  {family}: " + ", ".join(parts))
+
+
+def main():
+    parser = argparse.ArgumentParser(description=__doc__.splitlines()[0])
+    parser.add_argument("program")
+    parser.add_argument("--cases", type=int, default=60)
+    parser.add_argument("--seed", type=int, default=1)
+    parser.add_argument("--first", type=int, default=0, help="index of the first case")
+    parser.add_argument("--keep", help="a folder for the files of the cases")
+    arguments = parser.parse_args()
+    arguments.program = str(Path(arguments.program).resolve())
+    print(f"seed {arguments.seed}, {arguments.cases} cases from {arguments.first}")
+    findings = Findings()
+    indices = range(arguments.first, arguments.first + arguments.cases)
+    passed = sum(run_case(arguments, index, findings) for index in indices)
+    print_largest(findings)
+    print(f"{passed} passed, {arguments.cases - passed} failed")
+    return 0 if passed == arguments.cases else 1
+
+
+if __name__ == "__main__":
+    sys.exit(main())
