@@ -1,10 +1,11 @@
 """Runs the examples of the documentation: docs_examples.py PROGRAM [ROOT]
 
 Every ```yaml block with a `surfaces:` key in README.md, docs/*.md and docs/methods/*.md must run. A
-block whose first line is `# FILE.yaml` is known by that name on its page, and a ```csv block whose
-first line is `# FILE.csv` is saved beside it. In a ```text block that begins with
-`$ rainledger losses FILE.yaml ...` the lines must follow each other as in the real output; a line
-`...` stands for any number of lines left out. FILE is a block of the page, or scenarios/NAME.yaml.
+block whose first line is `# FILE.yaml` is known by that name on its page (without surfaces, `storm`
+must take it), and a ```csv block whose first line is `# FILE.csv` is saved beside it. In a ```text
+block that begins with `$ rainledger losses FILE ...` or `$ rainledger storm FILE ...` the lines must
+follow each other as in the real output; a line `...` stands for any number of lines left out. FILE is
+a block of the page, or a file of scenarios/.
 """
 
 import re
@@ -17,7 +18,8 @@ from pathlib import Path
 
 FENCE = re.compile(r"^```(\w+)[ \t]*\n(.*?)^```[ \t]*$", re.MULTILINE | re.DOTALL)
 NAMED = re.compile(r"# (\S+\.(?:yaml|csv))\s*\n")
-COMMAND = re.compile(r"\$ rainledger losses (\S+\.yaml)(.*)\n")
+COMMAND = re.compile(r"\$ rainledger (losses|storm) (\S+\.(?:yaml|csv))(.*)\n")
+SURFACES = re.compile(r"^surfaces:", re.MULTILINE)
 NUMBER = re.compile(r"(-?\d+(?:\.\d+)?(?:e[-+]?\d+)?)")
 MANY_DIGITS = 10
 LAST_DIGITS = 1e-9  # relative: compilers may differ in the last bit of a full-precision number
@@ -76,22 +78,23 @@ def first_line_missing(shown, real):
     return None
 
 
-def run(program, folder, name, arguments):
-    command = [program, "losses", name, *arguments]
+def run(program, folder, verb, name, arguments):
+    command = [program, verb, name, *arguments]
     return subprocess.run(command, cwd=folder, capture_output=True, text=True, timeout=60)
 
 
 def check_scenario(program, folder, name):
-    ended = run(program, folder, name, [])
+    verb = "losses" if SURFACES.search((folder / name).read_text(encoding="utf-8")) else "storm"
+    ended = run(program, folder, verb, name, [])
     return None if ended.returncode == 0 else f"status {ended.returncode}\n{ended.stderr}"
 
 
 def check_output(program, folder, block):
     command = COMMAND.match(block)
-    name, arguments = command[1], shlex.split(command[2])
+    verb, name, arguments = command[1], command[2], shlex.split(command[3])
     if not (folder / name).exists():
-        return f"no yaml block of this page is named {name}"
-    ended = run(program, folder, name, arguments)
+        return f"no block of this page is named {name}"
+    ended = run(program, folder, verb, name, arguments)
     if ended.returncode != 0:
         return f"status {ended.returncode}\n{ended.stderr}"
     missing = first_line_missing(block.splitlines()[1:], ended.stdout.splitlines())
@@ -105,7 +108,7 @@ def write_files(blocks, folder):
         named = NAMED.match(text)
         if kind == "csv" and named:
             (folder / named[1]).write_text(text, encoding="utf-8")
-        elif kind == "yaml" and re.search(r"^surfaces:", text, re.MULTILINE):
+        elif kind == "yaml" and (named or SURFACES.search(text)):
             name = named[1] if named else f"line_{line}.yaml"
             if (folder / name).exists():
                 sys.exit(f"line {line}: {name} stands on its page twice")

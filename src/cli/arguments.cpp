@@ -62,7 +62,7 @@ void sort_option(Arguments& sorted, const po::option& option, std::span<const Op
     else if (sorted.has(name))
         sorted.problem = "--" + name + " is given twice";
     else if (!argument_of(name, known).empty() && (text.empty() || took_an_option(option)))
-        sorted.problem = "--" + name + " needs a " + std::string(argument_of(name, known));
+        sorted.problem = "--" + name + " needs a value: " + std::string(argument_of(name, known));
     else
         sorted.options.emplace(name, text);
 }
@@ -72,7 +72,7 @@ std::string syntax_problem(const po::invalid_command_line_syntax& error,
     const std::string name = without_dashes(error.get_option_name());
     if (error.kind() == po::invalid_command_line_syntax::extra_parameter)
         return "--" + name + " takes no argument";
-    return "--" + name + " needs a " + std::string(argument_of(name, known));
+    return "--" + name + " needs a value: " + std::string(argument_of(name, known));
 }
 
 }  // namespace

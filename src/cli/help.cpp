@@ -4,18 +4,20 @@
 #include <span>
 #include <string_view>
 
+#include "cli/help_parts.hpp"
 #include "cli/losses_options.hpp"
 
 namespace rainledger {
 namespace {
 
-constexpr std::size_t kTextColumn = 22;
+constexpr std::size_t kTextColumn = 24;
 
 constexpr std::string_view kProgramShort =
     R"(rainledger: where the rain goes. Rainfall losses, step by step, in a ledger that closes.
 
 Usage:
   rainledger losses SCENARIO [options]   the loss ledger of a site under its storms
+  rainledger storm INPUT [options]       a storm from statistics, a gauge record or a scenario
   rainledger schema                      JSON Schema of the scenario files, for editors
 
   -h, --help            help on the program; after a command, help on the command
@@ -31,22 +33,13 @@ Examples:
   rainledger losses tannery_lane.yaml
   rainledger losses tannery_lane.yaml --ledger ledger.csv --json results.json
   rainledger losses tannery_lane.yaml --units in
+  rainledger storm county.csv --return-period '10 yr' --duration '2 h' --every '5 min'
 
 Every quantity in a scenario carries its unit ('12.5 mm', '1.2 in/hr', '0.42 ha').
 )";
 
-constexpr std::string_view kExitStatuses = R"(
-Exit status:
-  0    done
-  2    the command line is wrong
-  3    an input is wrong
-  4    a file could not be read or written
-  5    a fault of the program itself
-  130  interrupted
-)";
-
 constexpr std::string_view kCautionText = R"(
-Results are estimates from assumed losses; local codes and a licensed engineer decide.
+Results are estimates from assumed rain and losses; local codes and a licensed engineer decide.
 )";
 
 constexpr std::string_view kLossesTop =
@@ -78,9 +71,13 @@ Examples:
   rainledger losses quarry_row.yaml
   rainledger losses quarry_row.yaml --ledger ledger.csv --every '15 min'
   rainledger losses quarry_row.yaml --json - > results.json
+  rainledger losses quarry_row.yaml --chart lawn.svg --surface lawn
 
 Defaults: the summary in mm, the ledger at the rain's own steps, no files.
-A file appears whole or not at all. Files use mm, mm/h, h, m2, m3 and L/s whatever --units says.
+A file appears whole or not at all, and none if the chart cannot be drawn; gnuplot draws it.
+A chart shows the ledger of one surface under one storm, where --storm and --surface choose them
+or there are no others; else it sets surfaces, or storms, side by side.
+Ledger and JSON use mm, mm/h, h, m2, m3 and L/s whatever --units says.
 The summary goes to standard output; warnings, notes and errors go to standard error.
 )";
 
@@ -98,13 +95,10 @@ Example:
   rainledger schema > scenario.schema.json
 )";
 
-constexpr std::string_view kHelpLine =
-    "  -h, --help            -h is one screen, --help the whole page\n";
-
-std::string option_lines(const OptionRow& row) {
+std::string lines_of(const OptionRow& row, std::size_t column) {
     std::string head = "  --" + std::string(row.name);
     if (!row.argument.empty()) head += " " + std::string(row.argument);
-    head.resize(std::max(head.size() + 2, kTextColumn + 2), ' ');
+    head.resize(std::max(head.size() + 2, column), ' ');
     std::string out;
     std::string_view text = row.text;
     while (true) {
@@ -119,14 +113,25 @@ std::string option_lines(const OptionRow& row) {
 std::string page_of(std::string_view top, std::span<const OptionRow> rows, std::string_view more,
                     HelpWanted page) {
     std::string out(top);
-    for (const OptionRow& row : rows)
-        out += option_lines(row);
-    out += kHelpLine;
+    out += option_lines(rows, kTextColumn) + help_line(kTextColumn);
     if (page == HelpWanted::long_page) out.append(more).append(kExitStatuses);
     return out;
 }
 
 }  // namespace
+
+std::string option_lines(std::span<const OptionRow> rows, std::size_t column) {
+    std::string out;
+    for (const OptionRow& row : rows)
+        out += lines_of(row, column);
+    return out;
+}
+
+std::string help_line(std::size_t column) {
+    std::string out = "  -h, --help";
+    out.resize(column, ' ');
+    return out + "-h is one screen, --help the whole page\n";
+}
 
 std::string program_help(HelpWanted page) {
     std::string out(kProgramShort);

@@ -9,6 +9,7 @@ namespace rainledger {
 
 [[nodiscard]] std::string program_help(HelpWanted page);
 [[nodiscard]] std::string losses_help(HelpWanted page);
+[[nodiscard]] std::string storm_help(HelpWanted page);
 [[nodiscard]] std::string schema_help(HelpWanted page);
 
 }  // namespace rainledger

@@ -7,6 +7,9 @@
 #include "cli/help.hpp"
 #include "cli/losses_command.hpp"
 #include "cli/losses_options.hpp"
+#include "cli/run_files.hpp"
+#include "cli/storm_command.hpp"
+#include "cli/storm_options.hpp"
 #include "cli/terminal.hpp"
 #include "rainledger/base/suggest.hpp"
 #include "rainledger/report/version.hpp"
@@ -16,11 +19,6 @@ namespace rainledger {
 namespace {
 
 using Words = std::span<const std::string>;
-
-ExitStatus wrong_usage(std::string_view command, std::string_view problem) {
-    print_wrong_usage(command, problem);
-    return ExitStatus::wrong_usage;
-}
 
 ExitStatus show(std::string_view text) {
     std::string problem;
@@ -38,6 +36,15 @@ ExitStatus losses(Words words) {
     return run_losses(*options);
 }
 
+ExitStatus storm(Words words) {
+    if (const HelpWanted page = help_wanted(words); page != HelpWanted::none)
+        return show(storm_help(page));
+    std::string problem;
+    const auto options = read_storm_options(words, problem);
+    if (!options) return wrong_usage("storm", problem);
+    return run_storm(*options);
+}
+
 ExitStatus schema(Words words) {
     if (const HelpWanted page = help_wanted(words); page != HelpWanted::none)
         return show(schema_help(page));
@@ -52,7 +59,8 @@ struct Command {
     std::string_view name;
     ExitStatus (*run)(Words);
 };
-constexpr std::array kCommands{Command{"losses", losses}, Command{"schema", schema}};
+constexpr std::array kCommands{Command{"losses", losses}, Command{"storm", storm},
+                               Command{"schema", schema}};
 
 ExitStatus no_command(Words words) {
     if (words.empty()) return wrong_usage("", "no command given");

@@ -69,20 +69,24 @@ std::string elapsed_text(double hours) {
     return fmt::format("{}{}:{:02}", time.negative ? "-" : "", time.hours, time.minutes);
 }
 
-std::string clock_text(const Hyetograph& rain, double elapsed_h) {
+std::string face_text(std::chrono::milliseconds face, std::chrono::milliseconds first_face) {
     namespace chrono = std::chrono;
-    const StampedEdges& stamps = *rain.stamps;
-    const auto first_day = chrono::floor<chrono::days>(face_of(stamps, stamps.unix_ms.front()));
+    const auto first_day = chrono::floor<chrono::days>(first_face);
     // Half a minute rounds up, as in the elapsed time beside it.
-    const auto face = chrono::floor<chrono::minutes>(face_of(stamps, instant_at(rain, elapsed_h)) +
-                                                     chrono::seconds{30});
-    const auto day = chrono::floor<chrono::days>(face);
-    const std::int64_t minute_of_day = (face - day).count();
+    const auto minute = chrono::floor<chrono::minutes>(face + chrono::seconds{30});
+    const auto day = chrono::floor<chrono::days>(minute);
+    const std::int64_t minute_of_day = (minute - day).count();
     const std::string clock = fmt::format("{:02}:{:02}", minute_of_day / 60, minute_of_day % 60);
     if (day == first_day) return clock;
     const chrono::year_month_day date{chrono::sys_days{day}};
     return fmt::format("{} {} {}", static_cast<unsigned>(date.day()),
                        kMonths[static_cast<unsigned>(date.month()) - 1], clock);
+}
+
+std::string clock_text(const Hyetograph& rain, double elapsed_h) {
+    const StampedEdges& stamps = *rain.stamps;
+    return face_text(face_of(stamps, instant_at(rain, elapsed_h)),
+                     face_of(stamps, stamps.unix_ms.front()));
 }
 
 StampedEdges stamps_at(const Hyetograph& rain, std::span<const double> elapsed_h) {

@@ -1,5 +1,6 @@
 #pragma once
 
+#include <chrono>
 #include <span>
 #include <string>
 
@@ -13,6 +14,11 @@ namespace rainledger {
 
 /// "2:05", hours and minutes, to the minute.
 [[nodiscard]] std::string elapsed_text(double hours);
+
+/// A clock face, given as milliseconds since 1970-01-01 00:00 of that face, to the minute: "10:36",
+/// or "5 Mar 02:15" on another day than that of `first_face`.
+[[nodiscard]] std::string face_text(std::chrono::milliseconds face,
+                                    std::chrono::milliseconds first_face);
 
 /// The clock face at `elapsed_h` of a stamped hyetograph, to the minute: "10:36", or "5 Mar 02:15"
 /// on another day than the first edge's.

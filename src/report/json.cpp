@@ -3,46 +3,13 @@
 #include <cstddef>
 #include <utility>
 
-#include "rainledger/base/number.hpp"
 #include "rainledger/report/caution.hpp"
-#include "rainledger/report/version.hpp"
 #include "report/json_parameters.hpp"
+#include "report/json_rain.hpp"
 #include "report/json_writer.hpp"
 
 namespace rainledger {
 namespace {
-
-void write_program(JsonWriter& json) {
-    json.begin_object();
-    json.member("name", "rainledger");
-    json.member("version", version());
-    json.end_object();
-}
-
-void write_rain(JsonWriter& json, const Storm& storm) {
-    const Hyetograph& rain = storm.rain;
-    json.begin_object();
-    json.member("depth_mm", total_depth_mm(rain));
-    json.member("duration_h", own_duration_h(rain));
-    json.member("peak_intensity_mm_per_h", peak_intensity_mm_per_h(rain));
-    json.member("steps", rain.own_steps);
-    json.key("starts");
-    if (rain.stamps)
-        json.value(iso_stamp(*rain.stamps, 0));
-    else
-        json.null();
-    json.member("starts_h", rain.edges_h.front());
-    json.key("file");
-    if (storm.file.empty())
-        json.null();
-    else
-        json.value(storm.file);
-    json.member("multiply_by", storm.multiply_by);
-    json.member("continued_h", storm.continued_h);
-    json.member("taken_as_dry_h", rain.taken_as_dry_h);
-    json.member("clock_assumed", rain.clock_assumed);
-    json.end_object();
-}
 
 void write_accounts(JsonWriter& json, const Accounts& total) {
     json.member("rain_mm", total.rain_mm);
@@ -140,14 +107,7 @@ void write_storm(JsonWriter& json, const Site& site, const Storm& storm, const S
 std::string results_json(const Scenario& scenario, std::span<const SiteLedger> ledgers,
                          std::span<const std::string> warnings) {
     JsonWriter json;
-    json.begin_object();
-    json.key("title");
-    if (scenario.title.empty())
-        json.null();
-    else
-        json.value(scenario.title);
-    json.key("program");
-    write_program(json);
+    begin_results(json, scenario.title);
     json.key("storms");
     json.begin_object();
     for (std::size_t i = 0; i < scenario.storms.size(); ++i) {
@@ -155,13 +115,7 @@ std::string results_json(const Scenario& scenario, std::span<const SiteLedger> l
         write_storm(json, scenario.site, scenario.storms[i], ledgers[i]);
     }
     json.end_object();
-    json.key("warnings");
-    json.begin_array();
-    for (const std::string& warning : warnings)
-        json.value(warning);
-    json.end_array();
-    json.member("caution", kCaution);
-    json.end_object();
+    end_results(json, warnings, kCaution);
     return std::move(json).take();
 }
 

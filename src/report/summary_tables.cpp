@@ -8,6 +8,7 @@
 #include "rainledger/base/number.hpp"
 #include "report/clock.hpp"
 #include "report/loss_words.hpp"
+#include "report/rain_words.hpp"
 #include "report/summary_parts.hpp"
 #include "report/text_table.hpp"
 
@@ -49,14 +50,6 @@ void add_rows(TextTable& table, const StormOnSite& on, CellsOf cells_of) {
     table.rule();
     for (const Area& area : joint_areas(on))
         table.row(cells_of(area));
-}
-
-/// The length of the step with the heaviest rain, h.
-double heaviest_step_h(const Hyetograph& rain) {
-    std::size_t heaviest = 0;
-    for (std::size_t step = 1; step < rain.own_steps; ++step)
-        if (rain.intensity_mm_per_h(step) > rain.intensity_mm_per_h(heaviest)) heaviest = step;
-    return rain.duration_h[heaviest];
 }
 
 bool has_run_on(const StormOnSite& on) {

@@ -56,10 +56,11 @@ TEST_CASE("what is wrong with the words after losses is said in one line") {
     CHECK(problem_of({"a", "-q"}) == "unknown option '-q'");
     CHECK(problem_of({"a", "--json", "x", "--json", "y"}) == "--json is given twice");
     CHECK(problem_of({"a", "--quiet", "--quiet"}) == "--quiet is given twice");
-    CHECK(problem_of({"a", "--json"}) == "--json needs a FILE");
-    CHECK(problem_of({"a", "--json", "--quiet"}) == "--json needs a FILE");
-    CHECK(problem_of({"a", "--json="}) == "--json needs a FILE");
-    CHECK(problem_of({"a", "--ledger", ""}) == "--ledger needs a FILE.csv");
+    CHECK(problem_of({"a", "--json"}) == "--json needs a value: FILE");
+    CHECK(problem_of({"a", "--json", "--quiet"}) == "--json needs a value: FILE");
+    CHECK(problem_of({"a", "--json="}) == "--json needs a value: FILE");
+    CHECK(problem_of({"a", "--units"}) == "--units needs a value: mm|in");
+    CHECK(problem_of({"a", "--ledger", ""}) == "--ledger needs a value: FILE.csv");
     CHECK(problem_of({"a", "--quiet=yes"}) == "--quiet takes no argument");
     CHECK(problem_of({"a", "--units", "cm"}) == "--units: 'cm' is not known; write mm or in");
     CHECK(problem_of({"a", "--every", "15"}) ==

@@ -36,7 +36,7 @@ TEST_CASE("the option --version names the program and its version") {
 
 TEST_CASE("help: -h is one screen, --help says more, both on standard output with status 0") {
     for (const std::vector<std::string>& command :
-         {std::vector<std::string>{}, {"losses"}, {"schema"}}) {
+         {std::vector<std::string>{}, {"losses"}, {"storm"}, {"schema"}}) {
         std::vector<std::string> words = command;
         words.emplace_back("-h");
         const Outcome brief = run_here(words);
@@ -56,8 +56,9 @@ TEST_CASE("help: -h is one screen, --help says more, both on standard output wit
 
 TEST_CASE("the help of losses names every option and its default") {
     const std::string page = run_here({"losses", "--help"}).out;
-    for (const char* const option : {"--ledger FILE.csv", "--json FILE", "--units mm|in",
-                                     "--every DURATION", "--quiet", "--help", "Defaults:"})
+    for (const char* const option :
+         {"--ledger FILE.csv", "--json FILE", "--units mm|in", "--every DURATION", "--chart FILE",
+          "--storm NAME", "--surface NAME", "--quiet", "--help", "Defaults:"})
         CHECK_THAT(page, Contains(option));
 }
 
@@ -89,7 +90,7 @@ TEST_CASE("a wrong command line is two lines on standard error and status 2") {
         complaint({"loses", "x.yaml"}) ==
         "rainledger: unknown command 'loses'; did you mean 'losses'?\nSee 'rainledger --help'.\n");
     CHECK(complaint({"x.yaml"}) ==
-          "rainledger: unknown command 'x.yaml'; known here: losses, schema\n"
+          "rainledger: unknown command 'x.yaml'; known here: losses, storm, schema\n"
           "See 'rainledger --help'.\n");
     CHECK(complaint({"--quiet", "losses", "x.yaml"}) ==
           "rainledger: unknown option '--quiet'; options of a command stand after the command\n"
