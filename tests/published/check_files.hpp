@@ -19,12 +19,16 @@ struct ListedFile {
 };
 
 inline constexpr std::array kListedFiles{
-    ListedFile{"green_ampt.yaml", 24, 49},        ListedFile{"green_ampt_storms.yaml", 28, 134},
-    ListedFile{"green_ampt_ratios.yaml", 12, 56}, ListedFile{"horton.yaml", 16, 38},
-    ListedFile{"horton_storms.yaml", 15, 23},     ListedFile{"philip.yaml", 3, 4},
-    ListedFile{"constant_rates.yaml", 25, 39},    ListedFile{"curve_number.yaml", 27, 70},
-    ListedFile{"runoff_table.yaml", 22, 286},     ListedFile{"abstraction_ratio.yaml", 23, 61},
-    ListedFile{"antecedent.yaml", 12, 188},
+    ListedFile{"green_ampt.yaml", 24, 49},          ListedFile{"green_ampt_storms.yaml", 28, 134},
+    ListedFile{"green_ampt_ratios.yaml", 12, 56},   ListedFile{"horton.yaml", 16, 38},
+    ListedFile{"horton_storms.yaml", 15, 23},       ListedFile{"philip.yaml", 3, 4},
+    ListedFile{"constant_rates.yaml", 25, 39},      ListedFile{"curve_number.yaml", 27, 70},
+    ListedFile{"runoff_table.yaml", 22, 286},       ListedFile{"abstraction_ratio.yaml", 23, 61},
+    ListedFile{"antecedent.yaml", 12, 188},         ListedFile{"design_storms.yaml", 32, 288},
+    ListedFile{"rainfall_statistics.yaml", 16, 48}, ListedFile{"soil_tables.yaml", 29, 231},
+    ListedFile{"pedotransfer.yaml", 15, 177},       ListedFile{"cover_numbers.yaml", 66, 411},
+    ListedFile{"soil_groups.yaml", 20, 116},        ListedFile{"horton_values.yaml", 25, 123},
+    ListedFile{"storage_values.yaml", 25, 73},      ListedFile{"field_tests.yaml", 24, 26},
 };
 
 /// The folder of the tests and of the documents, set by the build.

@@ -2,9 +2,14 @@
 
 #include <array>
 #include <numeric>
+#include <span>
 #include <stdexcept>
 #include <string>
 
+#include "published/design_operations.hpp"
+#include "published/fieldtest_operations.hpp"
+#include "published/reference_operations.hpp"
+#include "published/statistics_operations.hpp"
 #include "rainledger/ledger/surface.hpp"
 #include "rainledger/losses/curve_number.hpp"
 #include "rainledger/losses/green_ampt.hpp"
@@ -258,8 +263,11 @@ constexpr std::array kOperations{
 }  // namespace
 
 const Operation& find_operation(std::string_view name) {
-    for (const Operation& operation : kOperations)
-        if (operation.name == name) return operation;
+    for (const std::span<const Operation> list :
+         {std::span<const Operation>(kOperations), design_operations(), statistics_operations(),
+          soil_operations(), cover_operations(), fieldtest_operations()})
+        for (const Operation& operation : list)
+            if (operation.name == name) return operation;
     throw std::runtime_error("unknown operation '" + std::string(name) + "'");
 }
 

@@ -68,6 +68,42 @@ TEST_CASE("published checks of antecedent conditions") {
     run_checks("antecedent.yaml");
 }
 
+TEST_CASE("published checks of rainfall statistics") {
+    run_checks("rainfall_statistics.yaml");
+}
+
+TEST_CASE("published checks of design storms") {
+    run_checks("design_storms.yaml");
+}
+
+TEST_CASE("published checks of soil tables") {
+    run_checks("soil_tables.yaml");
+}
+
+TEST_CASE("published checks of pedotransfer regressions") {
+    run_checks("pedotransfer.yaml");
+}
+
+TEST_CASE("published checks of cover numbers") {
+    run_checks("cover_numbers.yaml");
+}
+
+TEST_CASE("published checks of soil groups") {
+    run_checks("soil_groups.yaml");
+}
+
+TEST_CASE("published checks of Horton's values") {
+    run_checks("horton_values.yaml");
+}
+
+TEST_CASE("published checks of storage and steady rates") {
+    run_checks("storage_values.yaml");
+}
+
+TEST_CASE("published checks of field tests") {
+    run_checks("field_tests.yaml");
+}
+
 TEST_CASE("no published check vanishes") {
     for (const ListedFile& listed : kListedFiles) {
         const CheckFile file = load(listed.name);
