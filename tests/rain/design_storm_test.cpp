@@ -218,8 +218,7 @@ TEST_CASE("what a design storm cannot be made of is said with what to give inste
                   "the step of 1 h is longer than the storm of 30 min",
                   "give a step that divides the duration");
     check_refused(request_of(uniform, 24.0, 1e-5, 10.0),
-                  "a storm of 24 h has more than a million steps of 0.036 s",
-                  "give a longer step");
+                  "a storm of 24 h has more than a million steps of 0.036 s", "give a longer step");
     for (const double wrong : {-0.01, 1.01, nan})
         check_refused(request_of(triangular, 1.0, 0.1, 10.0, wrong),
                       "the peak must lie at a share of 0 to 1 of the duration",
