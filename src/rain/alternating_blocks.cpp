@@ -47,8 +47,10 @@ StormDepths blocks_by_duration(const DepthDuration& curve, const StormSteps& ste
             out.hint = std::move(answer.hint);
             return out;
         }
-        out.depth_mm.push_back(*answer.depth_mm - before_mm);
-        before_mm = *answer.depth_mm;
+        // Never less than before: where the curve is flat, rounding alone could let it fall.
+        const double depth_mm = std::max(*answer.depth_mm, before_mm);
+        out.depth_mm.push_back(depth_mm - before_mm);
+        before_mm = depth_mm;
     }
     return out;
 }

@@ -28,7 +28,12 @@ std::string periods_of(const RainfallStatistics& statistics) {
 }
 
 std::string which_to_choose(const RainfallStatistics& statistics) {
-    return "choose one of " + periods_of(statistics) + ", or one between them";
+    const auto& periods = statistics.return_period_yr;
+    const std::string one = "choose one of " + periods_of(statistics);
+    if (periods.front() > 1.0) return one + ", or one between them";
+    if (periods.size() < 3) return one;  // nothing is interpolated from a 1-year column
+    return one + ", or one between " + years_label(periods[1]) + " and " +
+           years_label(periods.back());
 }
 
 ListAnswer column_of(const RainfallStatistics& statistics, std::size_t column) {

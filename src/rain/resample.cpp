@@ -4,6 +4,7 @@
 #include <span>
 #include <utility>
 
+#include "rain/storm_steps.hpp"
 #include "rainledger/base/quantity.hpp"
 #include "rainledger/rain/rain_events.hpp"
 
@@ -44,10 +45,13 @@ Hyetograph empty_steps(const Hyetograph& rain, double every_h) {
     const std::string unit_name = rain.given ? rain.given->unit : "h";
     const Unit unit = find_unit(unit_name, Dimension::time).value_or(Unit{});
     const double first = rain.given ? rain.given->value.front() : rain.edges_h.front();
+    // Whole milliseconds are added up before they are brought to the unit: no sum of rounded hours.
+    const double every_ms = clean_ms(every_h);
     std::vector<double> edges;
     edges.reserve(count + 1);
     for (std::size_t k = 0; k <= count; ++k)
-        edges.push_back(first + unit.from_canonical(static_cast<double>(k) * every_h));
+        edges.push_back(first + static_cast<double>(k) * every_ms * unit.divide /
+                                    (unit.multiply * kMsPerHour));
     return make_hyetograph(std::move(edges), unit_name, std::move(depth_mm));
 }
 

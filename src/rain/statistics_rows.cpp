@@ -81,8 +81,9 @@ bool is_row_of_periods(const StatisticsRow& row) {
 
 /// A header, judged by itself and by the row beneath it: that one may tell where its own cells do
 /// not, or hold a slip.
+/// A row that begins with a number, 0 too, is one of figures: of rain from 0 to 5 min, say.
 bool is_header(const StatisticsRow& row, const StatisticsRow* next) {
-    if (row.cells.size() < 2 || is_data(row)) return false;
+    if (row.cells.size() < 2 || is_data(row) || parse_number(row.label())) return false;
     const bool above_data = next != nullptr && (is_data(*next) || is_row_of_units(*next));
     const bool above_periods = next != nullptr && is_row_of_periods(*next);
     const bool labelled = names_durations(row.label());

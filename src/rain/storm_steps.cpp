@@ -14,12 +14,6 @@ constexpr double kShortest_h = 1.0 / kMsPerHour;  // as a hyetograph's CSV takes
 constexpr double kMostSteps = 1e6;
 constexpr double kSameRatio = 1e-9;  // relative: rounding of a quotient of two times
 
-/// Time in ms: a whole number of them where the time is one but for the rounding of its hours.
-double clean_ms(double hours) {
-    const double ms = hours * kMsPerHour;
-    return is_same_coordinate(ms, std::round(ms)) ? std::round(ms) : ms;
-}
-
 StepsAnswer refused(std::string problem, std::string hint) {
     return {{}, std::move(problem), std::move(hint)};
 }
@@ -43,6 +37,11 @@ StepsAnswer check_range(double duration_h, double every_h) {
 }
 
 }  // namespace
+
+double clean_ms(double hours) {
+    const double ms = hours * kMsPerHour;
+    return is_same_coordinate(ms, std::round(ms)) ? std::round(ms) : ms;
+}
 
 StepsAnswer make_storm_steps(double duration_h, double every_h) {
     StepsAnswer out = check_range(duration_h, every_h);

@@ -9,6 +9,9 @@
 // The steps of a design storm, and what a pattern makes of them.
 namespace rainledger {
 
+/// Time in ms: a whole number of them where the time is one but for the rounding of its hours.
+[[nodiscard]] double clean_ms(double hours);
+
 /// Steps of equal length from 0; where they do not fill the duration, a shorter one at the end.
 /// Edges are whole minutes to the last bit where the step is one but for the rounding of its hours.
 struct StormSteps {

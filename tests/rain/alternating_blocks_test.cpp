@@ -175,6 +175,17 @@ TEST_CASE("rain of one intensity makes equal blocks without a warning") {
     CHECK(storm.warnings.empty());
 }
 
+TEST_CASE("where the curve is flat no block is below zero by rounding") {
+    // i t is the same for every t.
+    const DesignStorm storm =
+        blocks(IntensityFormula{500.0, 0.0, 1.0, 1.0, 1.0 / 60.0}, 120, 5, 0.5);
+    REQUIRE(storm.rain);
+    for (const double depth_mm : storm.rain->depth_mm)
+        CHECK(depth_mm >= 0.0);
+    CHECK_THAT(storm.depth_mm, WithinRel(500.0 / 60.0, 1e-12));
+    CHECK(storm.warnings.empty());
+}
+
 TEST_CASE("a table that begins above the step gives no blocks") {
     const DepthList list{{10.0 / 60.0, 1.0}, {19.0, 41.0}};
     const DesignStorm storm = blocks(list, 60, 5, 0.5);

@@ -257,7 +257,7 @@ TEST_CASE("a stretch of interval data begins and ends within what was taken as d
         CHECK(stamps_of(cut->rain) ==
               std::vector<std::string>{"2031-06-14T00:00:00+01:00", "2031-06-14T01:00:00+01:00",
                                        "2031-06-14T22:00:00+02:00", "2031-06-14T23:00:00+02:00"});
-        CHECK(cut->rain.taken_as_dry_h == 19.0);
+        CHECK(cut->rain.taken_as_dry_h == 20.0);
     }
     SECTION("of elapsed times") {
         RecordLayout minutes;

@@ -126,7 +126,10 @@ TEST_CASE("the return period may be left out where there is one column alone") {
     CHECK(depths_of(one_column, std::nullopt).list->depth_mm == std::vector<double>{41.0});
     const ListAnswer several = depths_of(with_one_year(), std::nullopt);
     CHECK(several.problem == "the table holds several return periods, and none is chosen");
-    CHECK(several.hint == "choose one of 1 yr, 2 yr, 10 yr, or one between them");
+    CHECK(several.hint == "choose one of 1 yr, 2 yr, 10 yr, or one between 2 yr and 10 yr");
+    const RainfallStatistics two_columns{{1.0}, {1.0, 2.0}, {20.0, 41.0}, {}};
+    CHECK(depths_of(two_columns, std::nullopt).hint == "choose one of 1 yr, 2 yr");
+    CHECK(depths_of(two_columns, 5.0).hint == "choose one of 1 yr, 2 yr");
     const ListAnswer none = depths_of(single_list(), 10.0);
     CHECK(none.problem == "the table holds no return periods to choose from");
     CHECK(none.hint == "leave the return period out");

@@ -70,6 +70,17 @@ TEST_CASE("resampling keeps what was taken as dry") {
     CHECK(resample(rain, 2.5 / 60.0).rain.dry_steps == std::vector<std::size_t>{2, 3, 4, 5});
 }
 
+TEST_CASE("edges at another step are whole to the last bit") {
+    std::vector<double> minutes;
+    for (int edge = 0; edge <= 1440; ++edge)
+        minutes.push_back(edge);
+    const Hyetograph rain = make_hyetograph(minutes, "min", Values(1440, 0.1));
+    const int every_min = GENERATE(1, 3, 7, 15);
+    const Hyetograph other = resample(rain, every_min / 60.0).rain;
+    for (std::size_t edge = 0; edge <= other.steps(); ++edge)
+        REQUIRE(other.given->value[edge] == static_cast<double>(edge) * every_min);
+}
+
 TEST_CASE("resampling leaves out what continues a storm") {
     Hyetograph rain = make_hyetograph({0.0, 5.0, 10.0}, "min", {1.0, 3.0});
     append_dry_time(rain, 1.0);

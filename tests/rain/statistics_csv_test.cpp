@@ -219,6 +219,8 @@ TEST_CASE("what looks like a table of statistics, and what is rain") {
     CHECK_FALSE(looks_like_statistics(""));
     CHECK_FALSE(looks_like_statistics("end [min],depth [mm]\n5,0.4\n10,1.1\n"));
     CHECK_FALSE(looks_like_statistics("start [h],end [h],intensity [mm/h]\n0,0.5,12\n0.5,1,3\n"));
+    CHECK_FALSE(looks_like_statistics("start [h],end [h],depth [mm]\n0,1,12\n1,2,3\n"));
+    CHECK_FALSE(looks_like_statistics("start [min],end [min],depth [mm]\n-5,10,12\n10,20,3\n"));
     CHECK_FALSE(looks_like_statistics("time,rain [mm]\n2031-03-04T10:05,1.2\n"));
     CHECK_FALSE(looks_like_statistics("time\n2031-03-04 10:05:17\n2031-03-04 10:07:41\n"));
     CHECK_FALSE(looks_like_statistics(

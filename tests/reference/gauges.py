@@ -43,7 +43,7 @@ def tip_steps(tips, offset_minutes, every_ms, spread_over_ms=None):
     """(edges, depths) of an event's tips (instant, depth): in steps, or spread with the dry spell
     as the longest time of a tip."""
     face = offset_minutes * 60_000
-    midnight = (tips[0][0] + face) // DAY_MS * DAY_MS - face
+    midnight = (tips[0][0] + face - 1) // DAY_MS * DAY_MS - face  # before the tip, not at it
     pieces = spread(tips, every_ms, spread_over_ms) if spread_over_ms else None
     from_step = (floor(Fraction(pieces[0][0] - midnight, every_ms)) if pieces
                  else ceil(Fraction(tips[0][0] - midnight, every_ms)) - 1)

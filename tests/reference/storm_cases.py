@@ -127,9 +127,10 @@ def draw_source(rng, pattern, files):
         text = f"statistics: county.csv, return_period: {decimal(years)} yr"
     else:
         rows = [(h, row[0]) for h, row in zip(given["duration_h"], given["depth_mm"])]
-        rows = [(h, mpf(round(d * 10)) / 10) for h, d in rows]
-        text = "depths: {" + ", ".join(f"{time_text(rng, h)}: {decimal(Fraction(round(d * 10), 10))}"
-                                       " mm" for h, d in rows) + "}"
+        tenths = [(h, round(d * 10)) for h, d in rows]
+        rows = [(h, mpf(n) / 10) for h, n in tenths]
+        text = "depths: {" + ", ".join(f"{time_text(rng, h)}: {decimal(Fraction(n, 10))} mm"
+                                       for h, n in tenths) + "}"
     return text, ("list", rows), given["duration_h"][0], given["duration_h"][-1]
 
 
@@ -174,7 +175,7 @@ def start_ms(rng):
 def tip_case(rng):
     """A tip log: bursts and dry times, equal instants, instants on edges, dry times just as long
     as what parts events; the offset of the gauge's clock or none."""
-    every_min = rng.choice((1, 2, 5, 10, 15, 60))
+    every_min = rng.choice((1, 2, 5, 7, 10, 15, 45, 60, 420, 1440))
     dry_h = rng.choice((1, 3, 6, 12))
     with_zone = rng.random() < 0.5
     offset = rng.choice((0, 60, -300, 345)) if with_zone else 0

@@ -29,6 +29,8 @@ TIME_H = mpf("1e-9")
 # A numerical integral of the intensity curve against the program's closed form.
 QUADRATURE = mpf("1e-9")
 PERIOD = mpf("1e-9")
+FORMULA_MARKS_H = [Fraction(minutes, 60)
+                   for minutes in (5, 10, 15, 30, 60, 120, 180, 360, 720, 1440)]
 
 
 class Findings:
@@ -92,10 +94,10 @@ def compare_design(program, case, folder, findings):
         findings.start_case("design: keifer_chu", QUADRATURE)
     else:
         findings.start_case("design: " + request["pattern"], RELATIVE)
-    storm = run_program(program, folder, "case.yaml")["storms"]["storm"]
+    storm = run_program(program, folder, "case.yaml", "--csv", "storm.csv")["storms"]["storm"]
+    compare_written(program, folder, findings, storm["steps"])
     edges, depths = design(request)
-    for held in storm["rain"]["design"]["held"]:
-        compare_held(findings, held, request, edges, depths)
+    compare_held(findings, storm["rain"]["design"]["held"], request, edges, depths)
     if case["resample_h"]:
         edges, depths = resample(edges, depths, case["resample_h"])
     compare_steps(findings, "storm", storm["steps"], edges, depths)
@@ -106,14 +108,29 @@ def compare_design(program, case, folder, findings):
                        largest_window(edges, depths, Fraction(int(minutes), 60)), sum(depths))
 
 
-def compare_held(findings, held, request, edges, depths):
-    marks = [h for h, _ in request["source"][1]] if request["source"][0] == "list" else [
-        Fraction(m, 60) for m in (5, 10, 15, 30, 60, 120, 180, 360, 720, 1440)]
-    duration = min(marks, key=lambda h: abs(mpf(held["duration_h"]) - real(h)))
-    where = f"held {held['duration_h']} h"
-    findings.check("edge", where, held["duration_h"], real(duration), TIME_H)
-    findings.depth("statistic", where, held["statistic_mm"], depth_of(request["source"], duration))
-    findings.depth("window", where, held["storm_mm"], largest_window(edges, depths, duration))
+def compare_written(program, folder, findings, steps):
+    """The file of steps is known for rain, gives the same depths to the last bit, and is written
+    back to the same bytes."""
+    storm, = run_program(program, folder, "storm.csv", "--csv", "again.csv")["storms"].values()
+    findings.equal("depths read back", [step["depth_mm"] for step in storm["steps"]],
+                   [step["depth_mm"] for step in steps])
+    findings.equal("depths below zero", [step for step in steps if step["depth_mm"] < 0], [])
+    findings.equal("file written back", (folder / "again.csv").read_bytes(),
+                   (folder / "storm.csv").read_bytes())
+
+
+def compare_held(findings, found, request, edges, depths):
+    """The durations that are whole numbers of steps, their statistics and what the storm holds."""
+    source = request["source"]
+    marks = [h for h, _ in source[1]] if source[0] == "list" else FORMULA_MARKS_H
+    marks = [h for h in marks if request["pattern"] == "alternating_blocks"
+             and h <= request["duration_h"] and (h / request["every_h"]).denominator == 1]
+    findings.equal("durations held", len(found), len(marks))
+    for held, hours in zip(found, marks):
+        where = f"held {held['duration_h']} h"
+        findings.check("edge", where, held["duration_h"], real(hours), TIME_H)
+        findings.depth("statistic", where, held["statistic_mm"], depth_of(source, hours))
+        findings.depth("window", where, held["storm_mm"], largest_window(edges, depths, hours))
 
 
 def compare_event(findings, where, found, wanted, table):
