@@ -3,9 +3,9 @@
 Every ```yaml block with a `surfaces:` key in README.md, docs/*.md and docs/methods/*.md must run. A
 block whose first line is `# FILE.yaml` is known by that name on its page (without surfaces, `storm`
 must take it), and a ```csv block whose first line is `# FILE.csv` is saved beside it. In a ```text
-block that begins with `$ rainledger losses FILE ...` or `$ rainledger storm FILE ...` the lines must
-follow each other as in the real output; a line `...` stands for any number of lines left out. FILE is
-a block of the page, or a file of scenarios/.
+block that begins with `$ rainledger losses FILE ...`, the same with `storm` or `fit`, or `$ rainledger
+lookup ...` the lines must follow each other as in the real output; a line `...` stands for any number
+of lines left out. FILE is a block of the page, or a file of scenarios/.
 """
 
 import re
@@ -18,7 +18,8 @@ from pathlib import Path
 
 FENCE = re.compile(r"^```(\w+)[ \t]*\n(.*?)^```[ \t]*$", re.MULTILINE | re.DOTALL)
 NAMED = re.compile(r"# (\S+\.(?:yaml|csv))\s*\n")
-COMMAND = re.compile(r"\$ rainledger (losses|storm) (\S+\.(?:yaml|csv))(.*)\n")
+COMMAND = re.compile(r"\$ rainledger (losses|storm|fit) (\S+\.(?:yaml|csv))(.*)\n")
+LOOKUP = re.compile(r"\$ rainledger (lookup)(.*)\n")
 SURFACES = re.compile(r"^surfaces:", re.MULTILINE)
 NUMBER = re.compile(r"(-?\d+(?:\.\d+)?(?:e[-+]?\d+)?)")
 MANY_DIGITS = 10
@@ -78,23 +79,23 @@ def first_line_missing(shown, real):
     return None
 
 
-def run(program, folder, verb, name, arguments):
-    command = [program, verb, name, *arguments]
+def run(program, folder, verb, *words):
+    command = [program, verb, *words]
     return subprocess.run(command, cwd=folder, capture_output=True, text=True, timeout=60)
 
 
 def check_scenario(program, folder, name):
     verb = "losses" if SURFACES.search((folder / name).read_text(encoding="utf-8")) else "storm"
-    ended = run(program, folder, verb, name, [])
+    ended = run(program, folder, verb, name)
     return None if ended.returncode == 0 else f"status {ended.returncode}\n{ended.stderr}"
 
 
 def check_output(program, folder, block):
     command = COMMAND.match(block)
-    verb, name, arguments = command[1], command[2], shlex.split(command[3])
-    if not (folder / name).exists():
-        return f"no block of this page is named {name}"
-    ended = run(program, folder, verb, name, arguments)
+    if command and not (folder / command[2]).exists():
+        return f"no block of this page is named {command[2]}"
+    verb, *words = (command or LOOKUP.match(block)).groups()
+    ended = run(program, folder, verb, *shlex.split(" ".join(words)))
     if ended.returncode != 0:
         return f"status {ended.returncode}\n{ended.stderr}"
     missing = first_line_missing(block.splitlines()[1:], ended.stdout.splitlines())
@@ -128,7 +129,7 @@ def check_page(program, root, page):
         for name, line in write_files(blocks, folder):
             yield line, name, check_scenario(program, folder, name)
         for kind, block, line in blocks:
-            if kind == "text" and COMMAND.match(block):
+            if kind == "text" and (COMMAND.match(block) or LOOKUP.match(block)):
                 what = block.splitlines()[0]
                 yield line, what, check_output(program, folder, block)
 

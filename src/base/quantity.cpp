@@ -49,11 +49,9 @@ constexpr std::array kAreaUnits{
     NamedUnit{"mi2", {5280.0 * 5280.0 * kM2PerSquareFoot, 1.0}},
 };
 constexpr std::array kVolumeUnits{
-    NamedUnit{"m3", {1.0, 1.0}},
-    NamedUnit{"L", {1.0, 1000.0}},
-    NamedUnit{"ft3", {kM3PerCubicFoot, 1.0}},
-    NamedUnit{"gal", {kM3PerGallon, 1.0}},
-    NamedUnit{"ac-ft", {43560.0 * kM3PerCubicFoot, 1.0}},
+    NamedUnit{"m3", {1.0, 1.0}},           NamedUnit{"L", {1.0, 1000.0}},
+    NamedUnit{"mL", {1.0, 1.0e6}},         NamedUnit{"ft3", {kM3PerCubicFoot, 1.0}},
+    NamedUnit{"gal", {kM3PerGallon, 1.0}}, NamedUnit{"ac-ft", {43560.0 * kM3PerCubicFoot, 1.0}},
 };
 constexpr std::array kDischargeUnits{
     NamedUnit{"L/s", {1.0, 1.0}},
@@ -213,7 +211,7 @@ std::string_view accepted_units(Dimension dimension) {
         case Dimension::area:
             return "m2, ha, km2, ft2, ac, mi2";
         case Dimension::volume:
-            return "L, m3, ft3, gal, ac-ft";
+            return "L, mL, m3, ft3, gal, ac-ft";
         case Dimension::discharge:
             return "L/s, m3/s, ft3/s, cfs, gpm";
         case Dimension::suction:

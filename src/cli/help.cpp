@@ -18,7 +18,9 @@ constexpr std::string_view kProgramShort =
 Usage:
   rainledger losses SCENARIO [options]   the loss ledger of a site under its storms
   rainledger storm INPUT [options]       a storm from statistics, a gauge record or a scenario
-  rainledger schema                      JSON Schema of the scenario files, for editors
+  rainledger fit TEST [options]          infiltration laws fitted to a field test
+  rainledger lookup TOPIC [NAME]         published parameters, with their sources
+  rainledger schema [field_test]         JSON Schema of the YAML files, for editors
 
   -h, --help            help on the program; after a command, help on the command
   --version             the version
@@ -34,6 +36,7 @@ Examples:
   rainledger losses tannery_lane.yaml --ledger ledger.csv --json results.json
   rainledger losses tannery_lane.yaml --units in
   rainledger storm county.csv --return-period '10 yr' --duration '2 h' --every '5 min'
+  rainledger fit pit3.yaml --yaml pit3_losses.yaml
 
 Every quantity in a scenario carries its unit ('12.5 mm', '1.2 in/hr', '0.42 ha').
 )";
@@ -82,9 +85,10 @@ The summary goes to standard output; warnings, notes and errors go to standard e
 )";
 
 constexpr std::string_view kSchemaTop =
-    R"(rainledger schema: JSON Schema (draft 2020-12) of the scenario files, on standard output.
+    R"(rainledger schema: JSON Schema (draft 2020-12) of the YAML files, on standard output.
 
-Usage: rainledger schema
+Usage: rainledger schema [scenario]      of scenarios
+       rainledger schema field_test      of field tests, as 'rainledger fit' reads them
 
 )";
 
@@ -93,6 +97,7 @@ An editor that knows the schema completes keys and marks mistakes while you type
 
 Example:
   rainledger schema > scenario.schema.json
+  rainledger schema field_test > field_test.schema.json
 )";
 
 std::string lines_of(const OptionRow& row, std::size_t column) {

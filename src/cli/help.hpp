@@ -10,6 +10,8 @@ namespace rainledger {
 [[nodiscard]] std::string program_help(HelpWanted page);
 [[nodiscard]] std::string losses_help(HelpWanted page);
 [[nodiscard]] std::string storm_help(HelpWanted page);
+[[nodiscard]] std::string fit_help(HelpWanted page);
+[[nodiscard]] std::string lookup_help(HelpWanted page);
 [[nodiscard]] std::string schema_help(HelpWanted page);
 
 }  // namespace rainledger

@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <array>
 
+#include "rainledger/base/suggest.hpp"
 #include "rainledger/chart/chart.hpp"
 
 namespace rainledger {
@@ -54,6 +55,11 @@ std::string read_amount(const Arguments& arguments, std::string_view option, Dim
                (zero == Zero::allowed ? "zero or more" : "above zero");
     amount = parsed.value;
     return {};
+}
+
+std::string unknown_word(std::string_view option, const std::string& text,
+                         std::span<const std::string_view> names) {
+    return "--" + std::string(option) + ": '" + text + "' is not known; " + suggestion(text, names);
 }
 
 void read_text(const Arguments& arguments, std::string_view option,

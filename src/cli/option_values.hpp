@@ -1,6 +1,7 @@
 #pragma once
 
 #include <optional>
+#include <span>
 #include <string>
 #include <string_view>
 
@@ -34,6 +35,10 @@ enum class Zero { refused, allowed };
 [[nodiscard]] std::string read_amount(const Arguments& arguments, std::string_view option,
                                       Dimension dimension, std::string_view noun,
                                       std::optional<double>& amount, Zero zero = Zero::refused);
+
+/// What is wrong with a word that is none of `names`.
+[[nodiscard]] std::string unknown_word(std::string_view option, const std::string& text,
+                                       std::span<const std::string_view> names);
 
 /// Copies the text of an option, if given.
 void read_text(const Arguments& arguments, std::string_view option,

@@ -1,50 +1,14 @@
 #include <algorithm>
-#include <filesystem>
 #include <initializer_list>
 #include <string_view>
 #include <utility>
 #include <vector>
 
 #include "cli/storm_sources.hpp"
-#include "rainledger/base/whole_file.hpp"
 #include "rainledger/scenario/storm_making.hpp"
 
 namespace rainledger {
 namespace {
-
-char lower(char c) {
-    return c >= 'A' && c <= 'Z' ? static_cast<char>(c - 'A' + 'a') : c;
-}
-
-bool has_scenario_ending(const std::string& path) {
-    std::string ending = std::filesystem::path(path).extension().string();
-    std::ranges::transform(ending, ending.begin(), lower);
-    return ending == ".yaml" || ending == ".yml";
-}
-
-/// The first line that says something: neither blank nor a comment.
-std::string_view first_line(std::string_view text) {
-    constexpr std::string_view kBlanks = " \t\r";
-    while (!text.empty()) {
-        const std::size_t end = std::min(text.find('\n'), text.size());
-        const std::string_view line = text.substr(0, end);
-        const std::size_t at = line.find_first_not_of(kBlanks);
-        if (at != std::string_view::npos && line[at] != '#') return line.substr(at);
-        text.remove_prefix(std::min(end + 1, text.size()));
-    }
-    return {};
-}
-
-/// A key with its colon, or a marker of YAML: no row of a CSV file begins so.
-bool begins_as_scenario(std::string_view text) {
-    const std::string_view line = first_line(text);
-    if (line.starts_with("---") || line.starts_with("{") || line.starts_with("%YAML")) return true;
-    const std::size_t colon = line.find(':');
-    if (colon == std::string_view::npos || colon == 0) return false;
-    const bool ends_key = colon + 1 == line.size() || line[colon + 1] == ' ' ||
-                          line[colon + 1] == '\r' || line[colon + 1] == '\t';
-    return ends_key && line.substr(0, colon).find_first_of(",;\t \"") == std::string_view::npos;
-}
 
 /// The cells of a header row in small letters, without blanks, quotes or units.
 std::vector<std::string> header_names(std::string_view line) {
@@ -73,22 +37,15 @@ bool looks_like_tips(const std::string& text) {
     return (names.size() == 1 && holds({"time"})) || holds({"tips", "count"});
 }
 
-std::optional<std::string> read_file(const std::string& path, Diagnostics& diagnostics) {
-    std::string problem;
-    auto text = read_whole_file(path, problem);
-    if (!text) diagnostics.unreadable({path, 0, 0, {}}, "cannot read the file: " + problem);
-    return text;
-}
-
 std::optional<StormInput> read_storm_input(const StormOptions& options, Diagnostics& diagnostics) {
     auto text = read_file(options.input, diagnostics);
     if (!text) return std::nullopt;
-    if (has_scenario_ending(options.input))
+    if (has_yaml_ending(options.input))
         return StormInput{InputKind::scenario, *std::move(text), "by its ending"};
     if (options.tip_mm) return StormInput{InputKind::rain, *std::move(text), {}};
     if (looks_like_statistics(*text))
         return StormInput{InputKind::statistics, *std::move(text), "its rows are durations"};
-    if (begins_as_scenario(*text))
+    if (begins_as_yaml(*text))
         return StormInput{InputKind::scenario, *std::move(text), "it begins with a key"};
     return StormInput{InputKind::rain, *std::move(text), {}};
 }

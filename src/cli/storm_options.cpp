@@ -5,7 +5,6 @@
 
 #include "cli/option_values.hpp"
 #include "rainledger/base/number.hpp"
-#include "rainledger/base/suggest.hpp"
 #include "rainledger/rain/hyetograph_csv.hpp"
 #include "rainledger/reference/mass_curves.hpp"
 
@@ -34,11 +33,6 @@ constexpr std::array kOrders{
     Word<EventOrder>{"peak_60", EventOrder::peak_60},
     Word<EventOrder>{"rarity", EventOrder::rarity},
 };
-
-std::string unknown_word(std::string_view option, const std::string& text,
-                         std::span<const std::string_view> names) {
-    return "--" + std::string(option) + ": '" + text + "' is not known; " + suggestion(text, names);
-}
 
 /// One word of a closed list.
 template <class Value, std::size_t size>

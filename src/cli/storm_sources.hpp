@@ -7,6 +7,7 @@
 #include <variant>
 #include <vector>
 
+#include "cli/read_input.hpp"
 #include "cli/storm_options.hpp"
 #include "rainledger/base/diagnostic.hpp"
 #include "rainledger/rain/gauge_record.hpp"
@@ -88,9 +89,5 @@ struct ReadRecord {
 
 /// Brings a storm to steps of --every, if it was given. What is wrong, or nothing.
 [[nodiscard]] std::string take_steps(const StormOptions& options, Storm& storm);
-
-/// The text of a file; nothing after adding to `diagnostics`.
-[[nodiscard]] std::optional<std::string> read_file(const std::string& path,
-                                                   Diagnostics& diagnostics);
 
 }  // namespace rainledger

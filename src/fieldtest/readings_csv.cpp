@@ -82,7 +82,7 @@ bool ReadingsReader::read_header() {
     if (columns_.kind == ReadingKind::volume_added && !rings_)
         error(line.number, line.cells[columns_.value].column,
               "volumes need the inner ring's diameter to become depths",
-              "state it beside the readings: ring: {inner_diameter: 300 mm}");
+              "state it: 'ring: {inner_diameter: 300 mm}' beside 'readings:', or --ring '300 mm'");
     if (table_.lines.size() == 1)
         error(line.number, 1, "there are no rows below the header", std::string(kExample));
     return errors_ == 0;

@@ -107,18 +107,13 @@ std::optional<Unit> HeaderReader::unit_of(const Title& title, Dimension dimensio
               "write it in brackets, '" + title.name + " [" + example + "]'");
         return std::nullopt;
     }
-    if (dimension == Dimension::volume && title.unit == "mL") {
-        constexpr double kMillilitresPerM3 = 1.0e6;
-        return Unit{1.0, kMillilitresPerM3};
-    }
     const auto unit = find_unit(title.unit, dimension);
     if (unit) return unit;
     const auto meant = meant_unit(title.unit, dimension);
-    const std::string mL = dimension == Dimension::volume ? "mL, " : "";
     error(title.column,
           in_quotes(title.unit) + " is not a unit of " + std::string(dimension_name(dimension)),
-          (meant ? "did you mean " + in_quotes(*meant) + "? " : "") + "known here: " + mL +
-              std::string(accepted_units(dimension)));
+          (meant ? "did you mean " + in_quotes(*meant) + "? " : "") +
+              "known here: " + std::string(accepted_units(dimension)));
     return std::nullopt;
 }
 

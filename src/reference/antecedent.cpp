@@ -1,6 +1,9 @@
 #include "rainledger/reference/antecedent.hpp"
 
+#include <algorithm>
 #include <array>
+
+#include "reference/sources.hpp"
 
 namespace rainledger {
 namespace {
@@ -22,6 +25,11 @@ constexpr std::array<AntecedentRow, 77> kRows{{
     {20, 9, 37},     {15, 6, 30},   {10, 4, 22},  {5, 2, 13},   {0, 0, 0},
 }};
 
+constexpr Provenance kRecalled{&sources::kNeh10, "table 10-1", Status::from_memory};
+constexpr Provenance kSeen{&sources::kNeh10, "table 10-1", Status::confirmed,
+                           "in Beven, table B6.3.2, after USDA-SCS 1985"};
+constexpr std::array kSeenNumbers{100.0, 90.0, 80.0, 70.0, 60.0, 50.0, 40.0, 30.0};
+
 double interpolated(double number, int AntecedentRow::*column) {
     for (std::size_t i = 1; i < kRows.size(); ++i) {
         const AntecedentRow& above = kRows[i - 1];
@@ -37,6 +45,10 @@ double interpolated(double number, int AntecedentRow::*column) {
 
 std::span<const AntecedentRow> antecedent_table() {
     return kRows;
+}
+
+const Provenance& antecedent_provenance(double condition_2) {
+    return std::ranges::find(kSeenNumbers, condition_2) == kSeenNumbers.end() ? kRecalled : kSeen;
 }
 
 double antecedent_dry(double condition_2) {

@@ -36,6 +36,10 @@ inline constexpr Source kNeh7{"NEH7", "USDA NRCS",
                               "National Engineering Handbook, Part 630, chapter 7, Hydrologic "
                               "soil groups",
                               "2009", "January 2009"};
+inline constexpr Source kNeh10{"NEH10", "USDA NRCS",
+                               "National Engineering Handbook, Part 630, chapter 10, Estimation of "
+                               "direct runoff from storm rainfall",
+                               "2004", ""};
 inline constexpr Source kRawls1976{"Rawls1976", "Rawls, Yates and Asmussen",
                                    "Calibration of selected infiltration equations for the "
                                    "Georgia Coastal Plain",
@@ -88,6 +92,7 @@ inline constexpr std::array kAll{
     &kTr55,
     &kBeven,
     &kNeh7,
+    &kNeh10,
     &kRawls1976,
     &kAkan1993,
     &kAkan1992,

@@ -11,9 +11,9 @@ namespace {
 
 constexpr std::size_t kLongestPath = 400;  // characters shown
 
-/// A file name relative to the scenario's folder, as messages show it.
-std::string path_beside(const std::string& scenario, const std::string& file) {
-    return (std::filesystem::path(scenario).parent_path() / file).string();
+/// A file name relative to the folder of the file that names it, as messages show it.
+std::string path_beside(const std::string& naming, const std::string& file) {
+    return (std::filesystem::path(naming).parent_path() / file).string();
 }
 
 }  // namespace
@@ -33,7 +33,7 @@ std::optional<InputFile> read_input_file(const Reading& reading, const Entry& en
     if (!text) {
         reading.diagnostics().unreadable(
             reading.at(entry.mark()), "cannot read '" + cut(path, kLongestPath) + "': " + problem,
-            "file names are relative to the scenario's folder");
+            "file names are relative to the " + std::string(reading.kind().noun) + "'s folder");
         return std::nullopt;
     }
     return InputFile{*std::move(name), std::move(path), *std::move(text)};

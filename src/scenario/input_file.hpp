@@ -5,13 +5,13 @@
 
 #include "scenario/yaml.hpp"
 
-// Files that a scenario names.
+// Files that a scenario or a field test names.
 namespace rainledger {
 
-/// A file that the scenario names, with its content.
+/// A file that another one names, with its content.
 struct InputFile {
-    std::string name;  ///< as the scenario names it
-    std::string path;  ///< as opened, and as messages show it: beside the scenario
+    std::string name;  ///< as named
+    std::string path;  ///< as opened, and as messages show it: beside the other
     std::string text;
 };
 

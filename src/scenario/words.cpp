@@ -1,10 +1,26 @@
 #include "scenario/words.hpp"
 
 #include <algorithm>
+#include <utility>
 
 #include "rainledger/base/suggest.hpp"
 
 namespace rainledger {
+namespace {
+
+/// The place in a field test that an unknown word in its map of `known` keys belongs to.
+std::optional<std::string> place_in_field_test(std::string_view typed, Words known) {
+    const bool top = holds(known, "readings");
+    if (!top && !holds(known, kRingKeys.front()) && !holds(known, kSteadyRateKeys.front()))
+        return std::nullopt;
+    if (!top && holds(kFieldTestKeys, typed))
+        return "it belongs to the top level of the field test";
+    if (holds(kRingKeys, typed)) return "it belongs under 'ring'";
+    if (holds(kSteadyRateKeys, typed)) return "it belongs under 'steady_rate'";
+    return suggestion(typed, known);
+}
+
+}  // namespace
 
 bool holds(Words words, std::string_view word) {
     return std::ranges::find(words, word) != words.end();
@@ -18,6 +34,9 @@ std::optional<std::string_view> probably_meant(std::string_view typed, Words kno
 std::string way_out(std::string_view typed, Words known) {
     if (const auto here = synonym(typed, known))
         return "here it is called '" + std::string(*here) + "'";
+    if (auto place = place_in_field_test(typed, known)) return *std::move(place);
+    if (typed == "losses") return "it belongs to a surface";
+    if (typed == "draws") return "it is for what-if runs, not for losses: leave it out";
     if (holds(kLaws, typed) && holds(known, "losses")) return "it belongs under 'losses'";
     if (holds(kSurfaceKeys, typed)) return "it belongs to a surface, beside its 'losses'";
     if (holds(kScenarioKeys, typed)) return "it belongs to the top level of the scenario";

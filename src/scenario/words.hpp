@@ -6,8 +6,8 @@
 #include <string>
 #include <string_view>
 
-// The words of the scenario YAML: the closed list of keys of every map, and the trade's other words
-// for them. The reader and the JSON Schema both follow these lists.
+// The words of the YAML of scenarios and field tests: the closed list of keys of every map, and the
+// trade's other words for them. The reader and the JSON Schema both follow these lists.
 namespace rainledger {
 
 using Words = std::span<const std::string_view>;
@@ -76,6 +76,18 @@ inline constexpr auto kPhiIndexKeys = std::to_array<std::string_view>({"observed
 inline constexpr auto kCurveNumberKeys = std::to_array<std::string_view>(
     {"number", "initial_abstraction_ratio", "tabulated_ratio", "antecedent"});
 inline constexpr auto kConditions = std::to_array<std::string_view>({"I", "II", "III"});
+
+inline constexpr auto kFieldTestKeys = std::to_array<std::string_view>(
+    {"title", "readings", "ring", "laws", "steady_rate", "ignore_first", "design_factor"});
+inline constexpr auto kRingKeys =
+    std::to_array<std::string_view>({"inner_diameter", "outer_diameter"});
+/// What is fitted to a field test; scenarios know the first three.
+inline constexpr auto kFittedLaws = std::to_array<std::string_view>(
+    {"horton", "green_ampt", "philip", "kostiakov", "modified_kostiakov"});
+/// The forms of a steady rate, of which it has one.
+inline constexpr auto kSteadyRateKeys = std::to_array<std::string_view>({"use", "fixed", "from"});
+inline constexpr std::string_view kFitted = "fitted";
+inline constexpr std::string_view kTail = "tail";
 
 /// Whether the word is one of the list.
 [[nodiscard]] bool holds(Words words, std::string_view word);

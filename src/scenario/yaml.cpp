@@ -89,8 +89,8 @@ std::optional<std::string> meant_fraction(const std::string& text) {
 
 }  // namespace
 
-Reading::Reading(std::string name, std::string text, Diagnostics& diagnostics)
-    : name_(std::move(name)), text_(std::move(text)), diagnostics_(&diagnostics) {
+Reading::Reading(std::string name, std::string text, Diagnostics& diagnostics, FileKind kind)
+    : name_(std::move(name)), text_(std::move(text)), diagnostics_(&diagnostics), kind_(kind) {
     line_starts_.push_back(0);
     for (std::size_t i = 0; i < text_.size(); ++i)
         if (text_[i] == '\n') line_starts_.push_back(i + 1);

@@ -17,13 +17,25 @@
 // program's own reader. Every function reports what is wrong and goes on.
 namespace rainledger {
 
+/// What a file is, in messages, and how one begins.
+struct FileKind {
+    std::string_view noun;
+    std::string_view example;
+};
+inline constexpr FileKind kScenarioFile{
+    "scenario", "a scenario starts with 'storm:' and 'surfaces:', each a map of its own"};
+inline constexpr FileKind kFieldTestFile{
+    "field test", "a field test names its readings, as in 'readings: pit3.csv'"};
+
 /// The text being read, from which places are cut, and where its problems go.
 class Reading {
 public:
     /// `name` stands for the file in messages and gives the folder for relative paths.
-    Reading(std::string name, std::string text, Diagnostics& diagnostics);
+    Reading(std::string name, std::string text, Diagnostics& diagnostics,
+            FileKind kind = kScenarioFile);
 
     [[nodiscard]] const std::string& name() const { return name_; }
+    [[nodiscard]] const FileKind& kind() const { return kind_; }
     [[nodiscard]] const std::string& text() const { return text_; }
     [[nodiscard]] Diagnostics& diagnostics() const { return *diagnostics_; }
 
@@ -45,6 +57,7 @@ private:
     std::string name_;
     std::string text_;
     Diagnostics* diagnostics_;
+    FileKind kind_;
     std::vector<std::size_t> line_starts_;
 };
 

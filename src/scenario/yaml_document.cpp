@@ -161,11 +161,16 @@ void refuse_broken(const Reading& reading, const YAML::Exception& fault) {
     reading.error(mark, cannot + in_plain_words(fault.msg), kLookAround);
 }
 
+std::string noun_of(const Reading& reading) {
+    return std::string(reading.kind().noun);
+}
+
 /// Reports what follows the first document: a second one, or what cannot stand there at all.
 void refuse_rest(const Reading& reading, const YAML::Mark& mark) {
     if (reading.at(mark).source_line.starts_with("---"))
-        reading.error(mark, "a second document begins here; a scenario is one document",
-                      "give each scenario a file of its own");
+        reading.error(mark,
+                      "a second document begins here; a " + noun_of(reading) + " is one document",
+                      "give each " + noun_of(reading) + " a file of its own");
     else
         reading.error(mark, "this cannot be read as YAML: nothing of the kind can stand here",
                       kLookAround);
@@ -174,6 +179,11 @@ void refuse_rest(const Reading& reading, const YAML::Mark& mark) {
 }  // namespace
 
 std::optional<YAML::Node> read_document(const Reading& reading) {
+    if (const auto bad = first_byte_not_text(reading.text())) {
+        reading.diagnostics().error(reading.at_byte(*bad), "this is not UTF-8 text",
+                                    "save the " + noun_of(reading) + " as plain text in UTF-8");
+        return std::nullopt;
+    }
     try {
         YAML::Node document = YAML::Load(reading.text());
         std::vector<YAML::Mark> tags;
@@ -185,7 +195,8 @@ std::optional<YAML::Node> read_document(const Reading& reading) {
             return std::nullopt;
         }
         if (document.IsDefined() && !document.IsNull()) return document;
-        reading.error(YAML::Mark::null_mark(), "the scenario is empty", kScenarioExample);
+        reading.error(YAML::Mark::null_mark(), "the " + noun_of(reading) + " is empty",
+                      std::string(reading.kind().example));
     } catch (const YAML::Exception& fault) {
         refuse_broken(reading, fault);
     }

@@ -43,6 +43,7 @@ TEST_CASE("every unit of every dimension is converted by its definition") {
     CHECK(read("1 km2", Dimension::area) == 1.0e6);
     CHECK(read("1 ft2", Dimension::area) == 0.09290304);
     CHECK(read("500 L", Dimension::volume) == 0.5);
+    CHECK(read("250 mL", Dimension::volume) == 0.00025);
     CHECK_THAT(read("1 ac-ft", Dimension::volume), WithinRel(1233.48183754752, 1e-15));
     CHECK(read("1 gal", Dimension::volume) == 0.003785411784);
     CHECK(read("1 m3/s", Dimension::discharge) == 1000.0);
@@ -110,6 +111,8 @@ TEST_CASE("other spellings of a unit are not taken, but name the one that was me
     CHECK(hint("m3/sec", Dimension::discharge) == "did you mean 'm3/s'?");
     CHECK(hint("ft^3/s", Dimension::discharge) == "did you mean 'ft3/s'?");
     CHECK(hint("CFS", Dimension::discharge) == "did you mean 'cfs'?");
+    CHECK(hint("ml", Dimension::volume) == "did you mean 'mL'?");
+    CHECK(hint("cm3", Dimension::volume) == "did you mean 'mL'?");
     CHECK(hint("acre-feet", Dimension::volume) == "did you mean 'ac-ft'?");
     CHECK(hint("cubic meters", Dimension::volume) == "did you mean 'm3'?");
     CHECK(hint("kpa", Dimension::suction) == "did you mean 'kPa'?");

@@ -13,6 +13,14 @@ namespace rainledger::cli_test {
 
 using testing::Folder;
 
+/// The words of both, in order.
+inline std::vector<std::string> joined(std::vector<std::string> words,
+                                       const std::vector<std::string>& more) {
+    for (const std::string& word : more)
+        words.push_back(word);
+    return words;
+}
+
 /// Where standard output goes.
 enum class Out {
     captured,

@@ -40,14 +40,6 @@ inline const std::string kTwoStorms =
     "  short: {steps: {every: 5 min, depths: [2, 6, 1], unit: mm}}\n"
     "  long: {steps: {every: 10 min, depths: [2, 6, 1], unit: mm}}\n";
 
-/// The words of both, in order.
-inline std::vector<std::string> joined(std::vector<std::string> words,
-                                       const std::vector<std::string>& more) {
-    for (const std::string& word : more)
-        words.push_back(word);
-    return words;
-}
-
 /// A folder with all of them.
 struct RainFolder {
     Folder folder;

@@ -36,7 +36,7 @@ TEST_CASE("the option --version names the program and its version") {
 
 TEST_CASE("help: -h is one screen, --help says more, both on standard output with status 0") {
     for (const std::vector<std::string>& command :
-         {std::vector<std::string>{}, {"losses"}, {"storm"}, {"schema"}}) {
+         {std::vector<std::string>{}, {"losses"}, {"storm"}, {"fit"}, {"schema"}}) {
         std::vector<std::string> words = command;
         words.emplace_back("-h");
         const Outcome brief = run_here(words);
@@ -90,7 +90,7 @@ TEST_CASE("a wrong command line is two lines on standard error and status 2") {
         complaint({"loses", "x.yaml"}) ==
         "rainledger: unknown command 'loses'; did you mean 'losses'?\nSee 'rainledger --help'.\n");
     CHECK(complaint({"x.yaml"}) ==
-          "rainledger: unknown command 'x.yaml'; known here: losses, storm, schema\n"
+          "rainledger: unknown command 'x.yaml'; known here: losses, storm, fit, lookup, schema\n"
           "See 'rainledger --help'.\n");
     CHECK(complaint({"--quiet", "losses", "x.yaml"}) ==
           "rainledger: unknown option '--quiet'; options of a command stand after the command\n"
@@ -101,18 +101,31 @@ TEST_CASE("a wrong command line is two lines on standard error and status 2") {
     CHECK(complaint({"losses", "x.yaml", "--unit", "in"}) ==
           "rainledger losses: unknown option '--unit'; did you mean '--units'?\n"
           "See 'rainledger losses --help'.\n");
+    CHECK(complaint({"schema", "field-tests"}) ==
+          "rainledger schema: 'field-tests' is not known; did you mean 'field_test'?\n"
+          "See 'rainledger schema --help'.\n");
     CHECK(complaint({"schema", "x"}) ==
-          "rainledger schema: takes no 'x'\nSee 'rainledger schema --help'.\n");
+          "rainledger schema: 'x' is not known; known here: scenario, field_test\n"
+          "See 'rainledger schema --help'.\n");
+    CHECK(complaint({"schema", "scenario", "x"}) ==
+          "rainledger schema: one schema at a time; 'x' is one word too many\n"
+          "See 'rainledger schema --help'.\n");
     CHECK(complaint({"schema", "--json"}) ==
           "rainledger schema: unknown option '--json'\nSee 'rainledger schema --help'.\n");
 }
 
-TEST_CASE("schema writes a JSON schema") {
-    const Outcome outcome = run_here({"schema"});
-    CHECK(outcome.status == 0);
-    CHECK(outcome.err.empty());
-    CHECK_THAT(outcome.out, Contains("https://json-schema.org/draft/2020-12/schema"));
-    CHECK(outcome.out.ends_with("}\n"));
+TEST_CASE("schema writes a JSON schema of each kind of file") {
+    const auto schema = [](const std::vector<std::string>& words) {
+        const Outcome outcome = run_here(words);
+        CHECK(outcome.status == 0);
+        CHECK(outcome.err.empty());
+        CHECK_THAT(outcome.out, Contains("https://json-schema.org/draft/2020-12/schema"));
+        CHECK(outcome.out.ends_with("}\n"));
+        return outcome.out;
+    };
+    CHECK_THAT(schema({"schema"}), Contains("\"title\": \"rainledger scenario\""));
+    CHECK(schema({"schema", "scenario"}) == schema({"schema"}));
+    CHECK_THAT(schema({"schema", "field_test"}), Contains("\"title\": \"rainledger field test\""));
 }
 
 }  // namespace rainledger::cli_test

@@ -97,12 +97,13 @@ TEST_CASE("headers that do not do are told, all at once") {
           "pit.csv:1:12: error: 'ml' is not a unit of volume\n"
           "    time [min],volume_added [ml]\n"
           "               ^\n"
-          "    known here: mL, L, m3, ft3, gal, ac-ft\n");
-    CHECK(errors("time [min],volume_added [mL]\n5,300\n") ==
-          "pit.csv:1:12: error: volumes need the inner ring's diameter to become depths\n"
-          "    time [min],volume_added [mL]\n"
-          "               ^\n"
-          "    state it beside the readings: ring: {inner_diameter: 300 mm}\n");
+          "    did you mean 'mL'? known here: L, mL, m3, ft3, gal, ac-ft\n");
+    CHECK(
+        errors("time [min],volume_added [mL]\n5,300\n") ==
+        "pit.csv:1:12: error: volumes need the inner ring's diameter to become depths\n"
+        "    time [min],volume_added [mL]\n"
+        "               ^\n"
+        "    state it: 'ring: {inner_diameter: 300 mm}' beside 'readings:', or --ring '300 mm'\n");
     CHECK_THAT(errors("time [min],drop [mm]\n"), Contains("there are no rows below the header"));
 }
 

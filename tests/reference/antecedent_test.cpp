@@ -33,4 +33,14 @@ TEST_CASE("numbers between rows are interpolated") {
     CHECK_THAT(antecedent_wet(2.5), WithinAbs(6.5, 1e-12));
 }
 
+TEST_CASE("a row says whether it was seen") {
+    CHECK(citation(antecedent_provenance(80.0)) ==
+          "USDA NRCS: National Engineering Handbook, Part 630, chapter 10, Estimation of direct "
+          "runoff from storm rainfall, 2004, table 10-1 (confirmed; in Beven, table B6.3.2, after "
+          "USDA-SCS 1985)");
+    CHECK(antecedent_provenance(81.0).status == Status::from_memory);
+    CHECK(antecedent_provenance(80.5).status == Status::from_memory);
+    CHECK(antecedent_provenance(20.0).status == Status::from_memory);
+}
+
 }  // namespace rainledger

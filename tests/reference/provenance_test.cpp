@@ -6,6 +6,7 @@
 #include <vector>
 
 #include "rainledger/base/whole_file.hpp"
+#include "rainledger/reference/antecedent.hpp"
 #include "rainledger/reference/composite_number.hpp"
 #include "rainledger/reference/cover_numbers.hpp"
 #include "rainledger/reference/horton_values.hpp"
@@ -44,9 +45,10 @@ std::vector<RowView> all_rows() {
 }
 
 std::vector<Provenance> all_provenances() {
-    std::vector<Provenance> all{texture_triangle_provenance(), bouwer_share_provenance(),
-                                texture_key_provenance(), paved_depression_provenance(),
-                                composite_number({74.0, 0.2, 0.5}).value->provenance};
+    std::vector<Provenance> all{
+        texture_triangle_provenance(), bouwer_share_provenance(),
+        texture_key_provenance(),      paved_depression_provenance(),
+        antecedent_provenance(61.0),   composite_number({74.0, 0.2, 0.5}).value->provenance};
     for (const RowView& view : all_rows())
         all.push_back(view.provenance);
     return all;

@@ -2,9 +2,10 @@
 
     schema_check.py PROGRAM FOLDER
 
-PROGRAM prints the schema when run as `PROGRAM schema`. Every scenario (*.yaml) in FOLDER and below
-must conform to it, and each spoiled copy of the sample below must not. Exit status 1 if any does
-otherwise, or if there is no scenario at all.
+PROGRAM prints the schema when run as `PROGRAM schema`, that of field tests as `PROGRAM schema
+field_test`. Every scenario and field test (*.yaml) in FOLDER and below must conform to its own, and
+each spoiled copy of the samples below must not. Exit status 1 if any does otherwise, or if there is
+no scenario or no field test at all.
 """
 
 import copy
@@ -158,6 +159,38 @@ SPOILED = [
 ]
 
 
+FIELD_TEST = """
+title: Quarry Row, pit 3
+readings: pit3.csv
+ring: {inner_diameter: 300 mm, outer_diameter: 600 mm}
+laws: [horton, green_ampt, philip, kostiakov, modified_kostiakov]
+steady_rate: {fixed: 32 mm/h}
+ignore_first: 5 min
+design_factor: 2
+"""
+
+SPOILED_FIELD_TESTS = [
+    (["readings"], None),
+    (["storm"], "pit3.csv"),
+    (["ring"], "300 mm"),
+    (["ring", "inner_diameter"], None),
+    (["ring", "inner_diameter"], 300),
+    (["ring", "diameter"], "300 mm"),
+    (["laws"], "horton"),
+    (["laws"], []),
+    (["laws"], ["horton", "horton"]),
+    (["laws"], ["curve_number"]),
+    (["steady_rate"], {}),
+    (["steady_rate"], {"use": "tail"}),
+    (["steady_rate"], {"from": "fitted"}),
+    (["steady_rate", "use"], "fitted"),
+    (["steady_rate", "fixed"], "32 mm"),
+    (["ignore_first"], 5),
+    (["design_factor"], 0.5),
+    (["design_factor"], "2 mm"),
+]
+
+
 def spoiled(sample, path, value):
     out = copy.deepcopy(sample)
     place = out
@@ -170,13 +203,30 @@ def spoiled(sample, path, value):
     return out
 
 
-def main():
-    program, folder = sys.argv[1:]
-    text = subprocess.run([program, "schema"], check=True, capture_output=True, text=True).stdout
+def validator_of(words):
+    text = subprocess.run(words, check=True, capture_output=True, text=True).stdout
     schema = json.loads(text)
     jsonschema.Draft202012Validator.check_schema(schema)
-    validator = jsonschema.Draft202012Validator(schema)
-    wrong = []
+    return jsonschema.Draft202012Validator(schema)
+
+
+def check_field_test(validator):
+    sample = yaml.safe_load(FIELD_TEST)
+    wrong = [f"the field test: {error.message}" for error in validator.iter_errors(sample)]
+    for form in ({"use": "fitted"}, {"from": "tail"}):
+        if not validator.is_valid({**sample, "steady_rate": form}):
+            wrong.append(f"does not conform: steady_rate: {form}")
+    for path, value in SPOILED_FIELD_TESTS:
+        if validator.is_valid(spoiled(sample, path, value)):
+            wrong.append(f"conforms although spoiled: field test, {'.'.join(path)}: {value}")
+    return wrong
+
+
+def main():
+    program, folder = sys.argv[1:]
+    validator = validator_of([program, "schema"])
+    field_tests = validator_of([program, "schema", "field_test"])
+    wrong = check_field_test(field_tests)
 
     sample = yaml.safe_load(SAMPLE)
     wrong += [f"the sample: {error.message}" for error in validator.iter_errors(sample)]
@@ -194,15 +244,17 @@ def main():
         if validator.is_valid({"storms": storms_by_name}) != conforms:
             wrong.append(f"{'does not conform' if conforms else 'conforms'}: {storms_by_name}")
 
-    scenarios = sorted(pathlib.Path(folder).rglob("*.yaml"))
-    for path in scenarios:
+    counts = {"scenario": 0, "field test": 0}
+    for path in sorted(pathlib.Path(folder).rglob("*.yaml")):
         document = yaml.safe_load(path.read_text(encoding="utf-8"))
-        wrong += [f"{path}: {error.json_path}: {error.message}"
-                  for error in validator.iter_errors(document)]
-    if not scenarios:
-        wrong.append(f"no scenario (*.yaml) in {folder}")
+        kind = "field test" if "readings" in document else "scenario"
+        counts[kind] += 1
+        wrong += [f"{path}: {error.json_path}: {error.message}" for error in
+                  (field_tests if kind == "field test" else validator).iter_errors(document)]
+    wrong += [f"no {kind} (*.yaml) in {folder}" for kind, count in counts.items() if count == 0]
 
-    print("\n".join(wrong) if wrong else f"{len(scenarios)} scenarios conform")
+    print("\n".join(wrong) if wrong else
+          f"{counts['scenario']} scenarios and {counts['field test']} field tests conform")
     return 1 if wrong else 0
 
 

@@ -4,6 +4,7 @@
 #include <nlohmann/json.hpp>
 
 #include "rainledger/base/quantity.hpp"
+#include "rainledger/scenario/field_test_file.hpp"
 #include "scenario/read_text.hpp"
 #include "scenario/words.hpp"
 #include "test.hpp"
@@ -29,7 +30,21 @@ nlohmann::json schema() {
     return nlohmann::json::parse(scenario_schema());
 }
 
+nlohmann::json schema_of_field_tests() {
+    return nlohmann::json::parse(field_test_schema());
+}
+
 }  // namespace
+
+TEST_CASE("the schema of field tests knows the keys that their reader knows") {
+    const nlohmann::json all = schema_of_field_tests();
+    const nlohmann::json& maps = all.at("$defs");
+    CHECK(properties_of(all) == keys_of(kFieldTestKeys));
+    CHECK(properties_of(maps.at("ring")) == keys_of(kRingKeys));
+    CHECK(properties_of(maps.at("steady_rate")) == keys_of(kSteadyRateKeys));
+    CHECK(all.at("required") == nlohmann::json::array({"readings"}));
+    CHECK(maps.at("ring").at("required") == nlohmann::json::array({"inner_diameter"}));
+}
 
 TEST_CASE("the schema knows the keys that the reader knows") {
     const nlohmann::json all = schema();
@@ -54,14 +69,15 @@ TEST_CASE("the schema knows the keys that the reader knows") {
 }
 
 TEST_CASE("every key of the schema is described and its text ends in a newline") {
-    const std::string text = scenario_schema();
-    CHECK(text.back() == '\n');
-    const nlohmann::json all = schema();
-    for (const auto& [name, map] : all.at("$defs").items())
-        for (const auto& [key, value] : map.at("properties").items()) {
-            INFO(name << "." << key);
-            CHECK((value.contains("description") || value.contains("$ref")));
-        }
+    for (const std::string& text : {scenario_schema(), field_test_schema()}) {
+        CHECK(text.back() == '\n');
+        const nlohmann::json all = nlohmann::json::parse(text);
+        for (const auto& [name, map] : all.at("$defs").items())
+            for (const auto& [key, value] : map.at("properties").items()) {
+                INFO(name << "." << key);
+                CHECK((value.contains("description") || value.contains("$ref")));
+            }
+    }
 }
 
 TEST_CASE("the schema asks for the keys that the reader misses") {

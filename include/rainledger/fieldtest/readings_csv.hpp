@@ -16,8 +16,8 @@
 // One header row naming the columns, each with its unit in square brackets; comma, semicolon or
 // tab; `#` comment lines; decimal point, or decimal comma when the separator is not a comma; no
 // quotes. `time` counts from the start of its pit's test, in a unit of time. Then one of
-// `infiltrated`, `drop`, `water_level`, in a unit of depth, or `volume_added`, in a unit of volume
-// or mL. Optional: `pit`, the name of the pit, on every row; `refill`, with water levels: x or yes
+// `infiltrated`, `drop`, `water_level`, in a unit of depth, or `volume_added`, in a unit of
+// volume. Optional: `pit`, the name of the pit, on every row; `refill`, with water levels: x or yes
 // on a row that gives the level just after filling up, at the time of the row above. Other columns
 // (notes, temperature) are passed over, unless their name looks like a slip for one of these.
 namespace rainledger {

@@ -3,6 +3,8 @@
 #include <span>
 #include <string_view>
 
+#include "rainledger/reference/provenance.hpp"
+
 // Curve numbers for antecedent runoff conditions I and III.
 namespace rainledger {
 
@@ -20,6 +22,9 @@ struct AntecedentRow {
 
 inline constexpr std::string_view kAntecedentSource =
     "NEH Part 630, chapter 10, table 10-1, linear between rows";
+
+/// Where the row of a number comes from; between rows, from memory.
+[[nodiscard]] const Provenance& antecedent_provenance(double condition_2);
 
 /// The number for condition I or III of a condition II number, 0 < CN <= 100, linear between rows.
 [[nodiscard]] double antecedent_dry(double condition_2);

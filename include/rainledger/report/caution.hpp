@@ -12,4 +12,8 @@ inline constexpr std::string_view kCaution =
 inline constexpr std::string_view kRainCaution =
     "Rain figures are estimates from past records; local codes and a licensed engineer decide.";
 
+/// The words that stand under every look-up.
+inline constexpr std::string_view kLookupCaution =
+    "Published values are means that scatter widely; local codes and a licensed engineer decide.";
+
 }  // namespace rainledger
