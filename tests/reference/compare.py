@@ -11,16 +11,14 @@ differences seen per law and account; the last line is "N passed, N failed". Exi
 anything failed.
 """
 
-import argparse
 import csv
 import json
 import subprocess
 import sys
-import tempfile
-from pathlib import Path
 
 from mpmath import inf, mpf, nstr
 
+from case_runner import run_cases
 from cases import LEAST_MARGIN, draw
 from march import ACCOUNTS
 from reading import read_scenario, time_h
@@ -248,46 +246,5 @@ def compare_report(findings, ledger, report):
     compare_area(findings, "site", "site", storm["site"], ledger["site"])
 
 
-def run_case(arguments, index, findings):
-    """Whether the case passed; prints a line if not."""
-    with tempfile.TemporaryDirectory() as scratch:
-        folder = Path(scratch)
-        if arguments.keep:
-            folder = Path(arguments.keep) / f"case_{arguments.seed}_{index}"
-            folder.mkdir(parents=True, exist_ok=True)
-        family = compare_case(arguments.program, arguments.seed, index, folder, findings)
-    if findings.failures:
-        more = len(findings.failures) - 1
-        print(f"failed: {family}: {findings.failures[0]}" + (f" and {more} more" if more else "")
-              + f" [--seed {arguments.seed} --first {index} --cases 1]", flush=True)
-    return not findings.failures
-
-
-def print_largest(findings):
-    print("largest differences (mm, mm/h, h):")
-    for law in sorted({law for law, _ in findings.largest}):
-        parts = [f"{account} {nstr(difference, 2)}"
-                 for (of, account), difference in findings.largest.items() if of == law]
-        print(f"  {law}: " + ", ".join(parts))
-
-
-def main():
-    parser = argparse.ArgumentParser(description=__doc__.splitlines()[0])
-    parser.add_argument("program")
-    parser.add_argument("--cases", type=int, default=60)
-    parser.add_argument("--seed", type=int, default=1)
-    parser.add_argument("--first", type=int, default=0, help="index of the first case")
-    parser.add_argument("--keep", help="a folder for the scenarios and the program's outputs")
-    arguments = parser.parse_args()
-    arguments.program = str(Path(arguments.program).resolve())
-    print(f"seed {arguments.seed}, {arguments.cases} cases from {arguments.first}")
-    findings = Findings()
-    indices = range(arguments.first, arguments.first + arguments.cases)
-    passed = sum(run_case(arguments, index, findings) for index in indices)
-    print_largest(findings)
-    print(f"{passed} passed, {arguments.cases - passed} failed")
-    return 0 if passed == arguments.cases else 1
-
-
 if __name__ == "__main__":
-    sys.exit(main())
+    sys.exit(run_cases(__doc__.splitlines()[0], Findings(), "mm, mm/h, h", compare_case))

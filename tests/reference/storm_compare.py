@@ -8,17 +8,15 @@ that reproduce it; then the largest differences by family; the last line is "N p
 Exit status 1 when anything failed.
 """
 
-import argparse
 from datetime import datetime, timezone
 from fractions import Fraction
 import json
-from pathlib import Path
 import subprocess
 import sys
-import tempfile
 
 from mpmath import mpf, nstr
 
+from case_runner import run_cases
 from gauges import HOUR_MS, WINDOWS_MIN, event_rarity, interval_events, tip_events
 from laws import real
 from storm_cases import draw
@@ -178,55 +176,19 @@ def compare_record(program, case, folder, findings):
                    for edge in event["edges_ms"]], event["depths"])
 
 
-def run_case(arguments, index, findings):
-    """Whether the case passed; prints a line if not."""
-    case = draw(arguments.seed, index)
+def compare_case(program, seed, index, folder, findings):
+    """Draws a case, writes its files and compares it; returns its family."""
+    case = draw(seed, index)
     findings.start_case(case["family"], RELATIVE)
-    with tempfile.TemporaryDirectory() as scratch:
-        folder = Path(scratch)
-        if arguments.keep:
-            folder = Path(arguments.keep) / f"case_{arguments.seed}_{index}"
-            folder.mkdir(parents=True, exist_ok=True)
-        for name, text in case["files"].items():
-            (folder / name).write_text(text, encoding="utf-8")
-        compare = compare_design if case["family"] == "design" else compare_record
-        try:
-            compare(arguments.program, case, folder, findings)
-        except (KeyError, TypeError, ValueError, RuntimeError) as error:
-            findings.failures.append(repr(error))
-    if findings.failures:
-        more = len(findings.failures) - 1
-        print(f"failed: {findings.family}: {findings.failures[0]}"
-              + (f" and {more} more" if more else "")
-              + f" [--seed {arguments.seed} --first {index} --cases 1]", flush=True)
-    return not findings.failures
-
-
-def print_largest(findings):
-    print("largest differences (mm, h, yr):")
-    for family in sorted({family for family, _ in findings.largest}):
-        parts = [f"{figure} {nstr(difference, 2)}"
-                 for (of, figure), difference in findings.largest.items() if of == family]
-        print(f"  {family}: " + ", ".join(parts))
-
-
-def main():
-    parser = argparse.ArgumentParser(description=__doc__.splitlines()[0])
-    parser.add_argument("program")
-    parser.add_argument("--cases", type=int, default=60)
-    parser.add_argument("--seed", type=int, default=1)
-    parser.add_argument("--first", type=int, default=0, help="index of the first case")
-    parser.add_argument("--keep", help="a folder for the files of the cases")
-    arguments = parser.parse_args()
-    arguments.program = str(Path(arguments.program).resolve())
-    print(f"seed {arguments.seed}, {arguments.cases} cases from {arguments.first}")
-    findings = Findings()
-    indices = range(arguments.first, arguments.first + arguments.cases)
-    passed = sum(run_case(arguments, index, findings) for index in indices)
-    print_largest(findings)
-    print(f"{passed} passed, {arguments.cases - passed} failed")
-    return 0 if passed == arguments.cases else 1
+    for name, text in case["files"].items():
+        (folder / name).write_text(text, encoding="utf-8")
+    compare = compare_design if case["family"] == "design" else compare_record
+    try:
+        compare(program, case, folder, findings)
+    except (KeyError, TypeError, ValueError, RuntimeError) as error:
+        findings.failures.append(repr(error))
+    return findings.family
 
 
 if __name__ == "__main__":
-    sys.exit(main())
+    sys.exit(run_cases(__doc__.splitlines()[0], Findings(), "mm, h, yr", compare_case))
