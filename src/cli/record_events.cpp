@@ -5,7 +5,7 @@
 // The list of a record's events.
 namespace rainledger {
 
-bool read_statistics(ReadRecord& read, std::string_view named_by, Diagnostics& diagnostics,
+bool read_statistics(OpenedRecord& read, std::string_view named_by, Diagnostics& diagnostics,
                      std::string& problem) {
     const std::optional<std::string>& path = read.source.statistics_path;
     if (!path) return true;
@@ -19,7 +19,7 @@ bool read_statistics(ReadRecord& read, std::string_view named_by, Diagnostics& d
     return false;
 }
 
-Gathered list_events(std::string title, ReadRecord read, std::string read_as) {
+Gathered list_events(std::string title, OpenedRecord read, std::string read_as) {
     const RecordSource& source = read.source;
     RecordEvents events = find_events(read.record, source.rule, source.steps);
     std::vector<EventRarity> rarities;

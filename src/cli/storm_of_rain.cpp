@@ -67,7 +67,7 @@ std::string event_problem(const StormOptions& options, const RecordEvents& event
            "' holds " + std::to_string(count) + ", which --events lists";
 }
 
-Gathered cut_event(const StormOptions& options, const ReadRecord& read, std::string read_as) {
+Gathered cut_event(const StormOptions& options, const OpenedRecord& read, std::string read_as) {
     const RecordSource& source = read.source;
     const RecordEvents events = find_events(read.record, source.rule, source.steps);
     const RainEvent* event = find_event(*options.event, events);
@@ -91,7 +91,7 @@ Gathered storms_of_record(const StormOptions& options, GaugeRecord record,
         read_as = "a gauge record of elapsed times";
     std::string problem = record_problem(options);
     if (problem.empty()) problem = step_problem(options, record);
-    ReadRecord read{std::move(record), source_of(options), std::nullopt};
+    OpenedRecord read{std::move(record), source_of(options), std::nullopt};
     if (!problem.empty() || !read_statistics(read, "--statistics", diagnostics, problem))
         return {std::nullopt, std::move(problem)};
     return options.event

@@ -72,7 +72,7 @@ Gathered events_of(const StormOptions& options, const Scenario& scenario, std::s
     Diagnostics told;
     auto record = read_gauge_record(source->path, *std::move(text), source->layout, told);
     if (!record) return {};
-    ReadRecord read{*std::move(record), *source, std::nullopt};
+    OpenedRecord read{*std::move(record), *source, std::nullopt};
     if (!read_statistics(read, "statistics", told, problem))
         return {std::nullopt, std::move(problem)};
     return list_events("Events of " + source->path, std::move(read), std::move(read_as));

@@ -66,7 +66,7 @@ struct Gathered {
     std::string problem;
 };
 /// A gauge record with everything that it is read and parted by.
-struct ReadRecord {
+struct OpenedRecord {
     GaugeRecord record;
     RecordSource source;
     std::optional<RainfallStatistics> statistics;
@@ -74,11 +74,11 @@ struct ReadRecord {
 
 /// Reads the table of source.statistics_path, if there is one. False where it cannot be read, or is
 /// wrong, or (`problem`, which begins with `named_by`) holds no return periods.
-[[nodiscard]] bool read_statistics(ReadRecord& read, std::string_view named_by,
+[[nodiscard]] bool read_statistics(OpenedRecord& read, std::string_view named_by,
                                    Diagnostics& diagnostics, std::string& problem);
 
 /// All events of a record.
-[[nodiscard]] Gathered list_events(std::string title, ReadRecord read, std::string read_as);
+[[nodiscard]] Gathered list_events(std::string title, OpenedRecord read, std::string read_as);
 
 [[nodiscard]] Gathered storms_of_scenario(const StormOptions& options, StormInput input,
                                           Diagnostics& diagnostics);

@@ -16,22 +16,6 @@ constexpr double kTooCorrelated = 0.5;
 constexpr std::size_t kLastRates = 3;
 constexpr double kClearlyAbove = 1.05;  // of a rate; nearer is within the reading
 
-/// The parameter in words, without its unit.
-std::string_view words_of(std::string_view key) {
-    constexpr std::array<std::pair<std::string_view, std::string_view>, 9> kWords{{
-        {"initial_capacity_mm_per_h", "initial capacity"},
-        {"final_capacity_mm_per_h", "final capacity"},
-        {"decay_per_h", "decay"},
-        {"effective_conductivity_mm_per_h", "effective conductivity"},
-        {"suction_deficit_mm", "suction-deficit product"},
-        {"sorptivity_mm_per_sqrt_h", "sorptivity"},
-        {"steady_term_mm_per_h", "steady term"},
-        {"coefficient_mm", "coefficient"},
-        {"exponent", "exponent"},
-    }};
-    return std::ranges::find(kWords, key, [](const auto& pair) { return pair.first; })->second;
-}
-
 bool is_steady_term(std::string_view key) {
     return key == "final_capacity_mm_per_h" || key == "effective_conductivity_mm_per_h" ||
            key == "steady_term_mm_per_h";
@@ -75,7 +59,7 @@ double Warner::longest_h() const {
 }
 
 void Warner::check_bound(const ParameterEstimate& estimate) {
-    const std::string name(words_of(estimate.key));
+    const std::string name(words_of_parameter(estimate.key));
     if (is_steady_term(estimate.key))
         warn(FitCaution::negative_steady_term,
              "the " + name +
@@ -111,7 +95,7 @@ void Warner::check_intervals() {
     if (fit_.degrees_of_freedom == 0) return;
     for (const ParameterEstimate& estimate : fit_.parameters) {
         if (estimate.kind != EstimateKind::fitted) continue;
-        const std::string name(words_of(estimate.key));
+        const std::string name(words_of_parameter(estimate.key));
         if (!estimate.low)
             warn(FitCaution::not_identified, "the readings do not tell the " + name);
         else if (*estimate.low <= 0.0)
@@ -170,6 +154,21 @@ void Warner::check_rise() {
 }
 
 }  // namespace
+
+std::string_view words_of_parameter(std::string_view key) {
+    constexpr std::array<std::pair<std::string_view, std::string_view>, 9> kWords{{
+        {"initial_capacity_mm_per_h", "initial capacity"},
+        {"final_capacity_mm_per_h", "final capacity"},
+        {"decay_per_h", "decay"},
+        {"effective_conductivity_mm_per_h", "effective conductivity"},
+        {"suction_deficit_mm", "suction-deficit product"},
+        {"sorptivity_mm_per_sqrt_h", "sorptivity"},
+        {"steady_term_mm_per_h", "steady term"},
+        {"coefficient_mm", "coefficient"},
+        {"exponent", "exponent"},
+    }};
+    return std::ranges::find(kWords, key, [](const auto& pair) { return pair.first; })->second;
+}
 
 std::vector<FitWarning> law_warnings(const LawFit& fit, std::span<const InfiltrationTest> tests) {
     return Warner(fit, tests).warnings();

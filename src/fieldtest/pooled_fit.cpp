@@ -4,6 +4,8 @@
 #include <cmath>
 #include <string>
 
+#include "fieldtest/law_warnings.hpp"
+
 namespace rainledger {
 namespace {
 
@@ -64,7 +66,7 @@ void warn_of_spread(PooledFit& pooled) {
             *std::ranges::find(fit.parameters, spread.key, &ParameterEstimate::key);
         if (!estimate.low || (*estimate.low <= spread.smallest && spread.largest <= *estimate.high))
             continue;
-        names += (names.empty() ? "" : ", ") + std::string(spread.key);
+        names += (names.empty() ? "" : ", ") + std::string(words_of_parameter(spread.key));
     }
     if (names.empty()) return;
     pooled.warnings.push_back(

@@ -28,12 +28,24 @@ void* operator new(std::size_t size) {
     return place;
 }
 
+void* operator new(std::size_t size, const std::nothrow_t& /*never throws*/) noexcept {
+    try {
+        return operator new(size);
+    } catch (const std::bad_alloc&) {
+        return nullptr;
+    }
+}
+
 void operator delete(void* place) noexcept {
     if (place != nullptr) in_use -= malloc_usable_size(place);
     std::free(place);
 }
 
 void operator delete(void* place, std::size_t /*size*/) noexcept {
+    operator delete(place);
+}
+
+void operator delete(void* place, const std::nothrow_t& /*never throws*/) noexcept {
     operator delete(place);
 }
 
