@@ -15,6 +15,7 @@ std::vector<const LawFit*> ranked_laws(const FieldFit& fit) {
     const auto& laws = fit.pooled ? fit.pooled->laws : fit.pits.front().laws;
     const auto& ranking = fit.pooled ? fit.pooled->ranking : fit.pits.front().ranking;
     std::vector<const LawFit*> out;
+    out.reserve(ranking.size());
     for (const RankedLaw& ranked : ranking)
         out.push_back(&*laws[ranked.index].fit);
     return out;

@@ -34,6 +34,7 @@ std::vector<StepRates> column_rates(const LossView& view, const ChartUnits& unit
 template <class Of>
 std::vector<double> each(const std::vector<StepRates>& rates, const Of& of) {
     std::vector<double> out;
+    out.reserve(rates.size());
     for (const StepRates& rate : rates)
         out.push_back(of(rate));
     return out;

@@ -136,6 +136,7 @@ std::string find_topic(const Arguments& arguments, LookupOptions& options) {
         return misplaced(arguments, *found);
     }
     std::vector<std::string_view> names;
+    names.reserve(kLookupTopics.size());
     for (const LookupTopic& topic : kLookupTopics)
         names.push_back(topic.name);
     return "unknown topic '" + typed + "'; " + suggestion(typed, names);

@@ -48,6 +48,7 @@ void add_output(std::vector<Output>& outputs, std::string_view option,
 template <class Named>
 [[nodiscard]] std::vector<std::string> names_of(const std::vector<Named>& items) {
     std::vector<std::string> names;
+    names.reserve(items.size());
     for (const Named& item : items)
         names.push_back(item.name);
     return names;

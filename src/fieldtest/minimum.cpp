@@ -139,7 +139,7 @@ ScaledSlopes scaled_slopes(const LeastSquaresProblem& problem, std::span<const d
                 found.gradient_cosine, std::abs(slopes.col(a).dot(residuals)) / residual_length);
     }
     const Eigen::JacobiSVD<Eigen::MatrixXd> svd(slopes, Eigen::ComputeThinU | Eigen::ComputeThinV);
-    const Eigen::VectorXd singular = svd.singularValues();  // the largest first
+    const Eigen::VectorXd& singular = svd.singularValues();  // the largest first
     const double smallest = singular(singular.size() - 1);
     found.condition = smallest > 0.0 ? singular(0) / smallest : kDependent;
     if (found.condition == kDependent) return found;
